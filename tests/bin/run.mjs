@@ -16,8 +16,8 @@ installDebian({
 });
 const cluster = startCluster({ home: join(root, '.data', 'test'), port: Number(process.env.TEST_PG_PORT ?? 55433), durable: false });
 exportWeb();
-const result = spawnSync('vitest', ['run', '--root', 'tests', ...process.argv.slice(2)], {
-  cwd: root,
+const result = spawnSync(join(root, 'tests/node_modules/.bin/vitest'), ['run', ...process.argv.slice(2)], {
+  cwd: join(root, 'tests'),
   stdio: 'inherit',
   env: { ...cleanEnv, TEST_DATABASE_URL: cluster.url('postgres') },
 });

@@ -40,10 +40,14 @@ export function install() {
 
 /** Installs Debian packages whose files are missing; says what to do where that needs another user. */
 export function installDebian(packagesByFile) {
-  const missing = Object.entries(packagesByFile).filter(([file]) => !existsSync(file)).map(([, name]) => name);
+  const missing = Object.entries(packagesByFile)
+    .filter(([file]) => !existsSync(file))
+    .map(([, name]) => name);
   if (missing.length === 0) return;
   if (process.getuid?.() !== 0 || !existsSync('/usr/bin/apt-get')) {
-    throw new Error(`Missing: ${missing.join(', ')}. Install them, on Debian with "apt-get install ${missing.join(' ')}", and start again.`);
+    throw new Error(
+      `Missing: ${missing.join(', ')}. Install them, on Debian with "apt-get install ${missing.join(' ')}", and start again.`,
+    );
   }
   const env = { ...cleanEnv, DEBIAN_FRONTEND: 'noninteractive' };
   const apt = (...args) => run('apt-get', ['-o', 'DPkg::Lock::Timeout=300', '-qq', ...args], { env });

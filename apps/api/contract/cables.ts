@@ -72,7 +72,10 @@ const spanFields = {
   /** Distance of the damper from its end of the free length (m); null where none is fitted. */
   damperPosition: quantity('The position of the damper', { above: 0, to: 100 }).nullable(),
 };
-const freeLengthRule = { path: ['chordLength'], message: 'The deductions leave no free length: the chord must be longer than both together.' };
+const freeLengthRule = {
+  path: ['chordLength'],
+  message: 'The deductions leave no free length: the chord must be longer than both together.',
+};
 const leavesLength = (span: { chordLength: number; lowerDeduction: number; upperDeduction: number }) =>
   span.chordLength - span.lowerDeduction - span.upperDeduction > 0;
 export const writeSpan = z.strictObject({ id, ...spanFields }).refine(leavesLength, freeLengthRule);

@@ -26,8 +26,18 @@ export const desk = z.object({
       cableId: id,
       reference: z.string(),
       structureName: z.string(),
-      before: z.object({ tension: z.number(), interval95: z.tuple([z.number(), z.number()]), startsOn: isoDate, steelTemperature: z.number().nullable() }),
-      after: z.object({ tension: z.number(), interval95: z.tuple([z.number(), z.number()]), startsOn: isoDate, steelTemperature: z.number().nullable() }),
+      before: z.object({
+        tension: z.number(),
+        interval95: z.tuple([z.number(), z.number()]),
+        startsOn: isoDate,
+        steelTemperature: z.number().nullable(),
+      }),
+      after: z.object({
+        tension: z.number(),
+        interval95: z.tuple([z.number(), z.number()]),
+        startsOn: isoDate,
+        steelTemperature: z.number().nullable(),
+      }),
     }),
   ),
 });

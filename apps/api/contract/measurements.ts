@@ -42,19 +42,21 @@ const measurementFields = {
 };
 
 /** Creates or replaces a measurement whole, with its peaks. `version` is the one that was seen, 0 for a new one. */
-export const putMeasurement = z
-  .strictObject({ ...measurementFields, version: z.number().int().min(0) })
-  .superRefine((entry, context) => {
-    const seen = new Map<string, number>();
-    for (const [index, peak] of entry.peaks.entries()) {
-      if (!peak.used) continue;
-      const key = `${peak.plane} ${peak.mode}`;
-      if (seen.has(key)) {
-        context.addIssue({ code: 'custom', path: ['peaks', index, 'mode'], message: `Mode ${peak.mode} is entered twice. Keep one, or set one aside.` });
-      }
-      seen.set(key, index);
+export const putMeasurement = z.strictObject({ ...measurementFields, version: z.number().int().min(0) }).superRefine((entry, context) => {
+  const seen = new Map<string, number>();
+  for (const [index, peak] of entry.peaks.entries()) {
+    if (!peak.used) continue;
+    const key = `${peak.plane} ${peak.mode}`;
+    if (seen.has(key)) {
+      context.addIssue({
+        code: 'custom',
+        path: ['peaks', index, 'mode'],
+        message: `Mode ${peak.mode} is entered twice. Keep one, or set one aside.`,
+      });
     }
-  });
+    seen.set(key, index);
+  }
+});
 export type PutMeasurement = z.infer<typeof putMeasurement>;
 
 export const measurement = z.object({

@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import { isoTime, sha256 } from './primitives.ts';
 import { issuedState } from './issued.ts';
+import { isoTime, sha256 } from './primitives.ts';
 
 /** The code printed in a report: groups of letters and digits that cannot be mistaken for one another. */
 export const verificationCode = z.string().regex(/^[0-9A-HJKMNP-TV-Z]{4}(-[0-9A-HJKMNP-TV-Z]{4}){3}$/);
