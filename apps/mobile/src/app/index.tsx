@@ -1,0 +1,5 @@
+import { Text } from 'react-native';
+
+export default function Start() {
+  return <Text>Strandnote</Text>;
+}
