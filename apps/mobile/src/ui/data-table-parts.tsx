@@ -1,0 +1,126 @@
+import type { ReactNode } from 'react';
+import { Pressable } from 'react-native';
+import { hairline, space } from '../theme/tokens.ts';
+import { useColours } from '../theme/use-theme.tsx';
+import type { Column, DataTableProps } from './data-table.tsx';
+import { Link } from './link.tsx';
+import { Text } from './text.tsx';
+import { webProps } from './web-props.ts';
+
+interface Sortable {
+  getColumn: (key: string) => { getIsSorted: () => false | 'asc' | 'desc'; toggleSorting: () => void } | undefined;
+}
+
+interface Rows<Row> {
+  getRowModel: () => { rows: { id: string; original: Row }[] };
+}
+
+const padding = `${space(2)}px ${space(3)}px`;
+const orders = { asc: 'ascending', desc: 'descending' } as const;
+
+export function Head<Row>({ table, columns }: { table: Sortable; columns: readonly Column<Row>[] }) {
+  const colours = useColours();
+  return (
+    <thead>
+      <tr>
+        {columns.map((column) => {
+          const sorted = table.getColumn(column.key)?.getIsSorted() || null;
+          return (
+            <th
+              key={column.key}
+              scope="col"
+              aria-sort={column.sortBy ? (sorted ? orders[sorted] : 'none') : undefined}
+              style={{
+                padding,
+                textAlign: alignOf(column),
+                width: column.width,
+                borderBottom: `${hairline}px solid ${colours.muted}`,
+                fontWeight: 'normal',
+              }}
+            >
+              {column.sortBy ? (
+                <Pressable
+                  role="button"
+                  onPress={() => table.getColumn(column.key)?.toggleSorting()}
+                  {...webProps({ 'aria-label': `Sort by ${column.header}` })}
+                  style={{ minHeight: 28, justifyContent: 'center' }}
+                >
+                  <HeadText align={alignOf(column)}>{`${column.header}${sorted ? (sorted === 'asc' ? ' ↑' : ' ↓') : ''}`}</HeadText>
+                </Pressable>
+              ) : (
+                <HeadText align={alignOf(column)}>{column.header}</HeadText>
+              )}
+            </th>
+          );
+        })}
+      </tr>
+    </thead>
+  );
+}
+
+function HeadText({ children, align }: { children: string; align: 'left' | 'right' }) {
+  return (
+    <Text size="note" tone="muted" align={align}>
+      {children}
+    </Text>
+  );
+}
+
+export function Body<Row>({ table, columns, hrefOf, rowKey, currentKey }: DataTableProps<Row> & { table: Rows<Row> }) {
+  const colours = useColours();
+  return (
+    <tbody>
+      {table.getRowModel().rows.map(({ id, original }, index) => {
+        const current = currentKey !== undefined && rowKey(original) === currentKey;
+        const border = index === 0 ? undefined : `${hairline}px solid ${colours.line}`;
+        return (
+          <tr key={id} aria-current={current || undefined} style={{ background: current ? colours.wash : undefined }}>
+            {columns.map((column, place) => {
+              const edge = { padding, textAlign: alignOf(column), borderTop: border, verticalAlign: 'middle' } as const;
+              return place === 0 ? (
+                <th key={column.key} scope="row" style={{ ...edge, whiteSpace: 'nowrap', fontWeight: 'normal' }}>
+                  <CellContent column={column} row={original} href={hrefOf?.(original)} strong />
+                </th>
+              ) : (
+                <td key={column.key} style={{ ...edge, whiteSpace: column.figures ? 'nowrap' : undefined }}>
+                  <CellContent column={column} row={original} />
+                </td>
+              );
+            })}
+          </tr>
+        );
+      })}
+    </tbody>
+  );
+}
+
+interface CellContentProps<Row> {
+  column: Column<Row>;
+  row: Row;
+  href?: string | undefined;
+  strong?: boolean;
+}
+
+export function CellContent<Row>({ column, row, href, strong }: CellContentProps<Row>) {
+  const content: ReactNode = column.cell(row);
+  const plain = typeof content === 'string' || typeof content === 'number';
+  if (href !== undefined && plain) {
+    return (
+      <Link href={href} strong>
+        {content}
+      </Link>
+    );
+  }
+  return plain ? (
+    <Text figures={column.figures} strong={strong} align={alignOf(column)}>
+      {content}
+    </Text>
+  ) : (
+    content
+  );
+}
+
+/** Figures stand under figures: right, unless said otherwise. */
+export function alignOf<Row>(column: Column<Row>): 'left' | 'right' {
+  return column.align ?? (column.figures ? 'right' : 'left');
+}
