@@ -1,12 +1,2 @@
-import { Slot } from 'expo-router';
-import { useThemeFonts } from '../theme/theme-fonts.ts';
-import { ThemeProvider } from '../theme/use-theme.tsx';
-
-export default function RootLayout() {
-  useThemeFonts();
-  return (
-    <ThemeProvider>
-      <Slot />
-    </ThemeProvider>
-  );
-}
+export { AppRoot as default } from '../features/shell/app-root.tsx';
+export { ErrorScreen as ErrorBoundary } from '../features/shell/error-screen.tsx';

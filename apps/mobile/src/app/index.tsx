@@ -1,5 +1,1 @@
-import { Text } from 'react-native';
-
-export default function Start() {
-  return <Text>Strandnote</Text>;
-}
+export { StartScreen as default } from '../features/shell/start-screen.tsx';

@@ -1,0 +1,1 @@
+export { AccountLayout as default } from '../../features/account/account-layout.tsx';

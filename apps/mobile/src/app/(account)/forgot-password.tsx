@@ -1,0 +1,1 @@
+export { ForgotPasswordScreen as default } from '../../features/account/forgot-password-screen.tsx';

@@ -1,0 +1,1 @@
+export { ResetPasswordScreen as default } from '../../features/account/reset-password-screen.tsx';

@@ -1,0 +1,1 @@
+export { PlacesLayout as default } from '../../../features/shell/places-layout.tsx';

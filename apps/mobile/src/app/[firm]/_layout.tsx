@@ -1,0 +1,1 @@
+export { FirmGate as default } from '../../features/shell/firm-gate.tsx';

@@ -1,0 +1,35 @@
+import { PersistQueryClientProvider } from '@tanstack/react-query-persist-client';
+import { Slot } from 'expo-router';
+import { useEffect } from 'react';
+import { openOutbox, sendAs } from '../../lib/outbox.ts';
+import { persistOptions, queryClient } from '../../lib/query-client.ts';
+import { registerServiceWorker } from '../../lib/service-worker.ts';
+import { useMeQuery } from '../../lib/session.tsx';
+import { useThemeFonts } from '../../theme/theme-fonts.ts';
+import { ThemeProvider } from '../../theme/use-theme.tsx';
+import { UpdatePrompt } from './update-prompt.tsx';
+
+registerServiceWorker();
+openOutbox().catch((error: unknown) => console.error(error));
+
+/** What every page stands in. */
+export function AppRoot() {
+  useThemeFonts();
+  return (
+    <ThemeProvider>
+      <PersistQueryClientProvider client={queryClient} persistOptions={persistOptions}>
+        <SenderOfOutbox />
+        <UpdatePrompt />
+        <Slot />
+      </PersistQueryClientProvider>
+    </ThemeProvider>
+  );
+}
+
+/** The outbox sends for the person who is signed in, and for nobody else. */
+function SenderOfOutbox() {
+  const me = useMeQuery();
+  const userId = me.data?.userId ?? null;
+  useEffect(() => sendAs(userId), [userId]);
+  return null;
+}

@@ -1,0 +1,17 @@
+import { useSyncExternalStore } from 'react';
+import { subscribeToUpdates, takeUpdate, updateWaits } from '../../lib/service-worker.ts';
+import { Button, Notice, Row, Text } from '../../ui/index.ts';
+
+/** A newer version has come and waits for a good moment, which the person knows best. */
+export function UpdatePrompt() {
+  const waits = useSyncExternalStore(subscribeToUpdates, updateWaits);
+  if (!waits) return null;
+  return (
+    <Notice>
+      <Row justify="space-between">
+        <Text>A newer version of Strandnote is ready. What you typed and saved stays.</Text>
+        <Button onPress={takeUpdate}>Reload now</Button>
+      </Row>
+    </Notice>
+  );
+}
