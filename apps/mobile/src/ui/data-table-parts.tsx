@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { Pressable } from 'react-native';
+import Svg, { Path } from 'react-native-svg';
 import { hairline, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
 import type { Column, DataTableProps } from './data-table.tsx';
@@ -43,9 +44,16 @@ export function Head<Row>({ table, columns }: { table: Sortable; columns: readon
                   role="button"
                   onPress={() => table.getColumn(column.key)?.toggleSorting()}
                   {...webProps({ 'aria-label': `Sort by ${column.header}` })}
-                  style={{ minHeight: 28, justifyContent: 'center' }}
+                  style={{
+                    minHeight: 28,
+                    flexDirection: 'row',
+                    alignItems: 'center',
+                    gap: 4,
+                    justifyContent: alignOf(column) === 'right' ? 'flex-end' : 'flex-start',
+                  }}
                 >
-                  <HeadText align={alignOf(column)}>{`${column.header}${sorted ? (sorted === 'asc' ? ' ↑' : ' ↓') : ''}`}</HeadText>
+                  <HeadText align={alignOf(column)}>{column.header}</HeadText>
+                  <SortSign sorted={sorted} />
                 </Pressable>
               ) : (
                 <HeadText align={alignOf(column)}>{column.header}</HeadText>
@@ -55,6 +63,17 @@ export function Head<Row>({ table, columns }: { table: Sortable; columns: readon
         })}
       </tr>
     </thead>
+  );
+}
+
+/** A small triangle: up for ascending, down for descending; `aria-sort` says it in words. */
+function SortSign({ sorted }: { sorted: 'asc' | 'desc' | null }) {
+  const colours = useColours();
+  if (!sorted) return null;
+  return (
+    <Svg width={8} height={8} viewBox="0 0 8 8" aria-hidden>
+      <Path d={sorted === 'asc' ? 'M4 1L8 7L0 7Z' : 'M4 7L8 1L0 1Z'} fill={colours.muted} />
+    </Svg>
   );
 }
 

@@ -1,4 +1,4 @@
-import type { Figure, Mark } from './figure.ts';
+import type { Figure, Mark, Pigment } from './figure.ts';
 import { linearScale } from './linear-scale.ts';
 import { type DrawnZone, zoneStyle } from './zone-style.ts';
 
@@ -127,8 +127,8 @@ function intervalMarks({ zone, tension, interval }: IntervalBarValues, ruler: Ru
   const [from, to] = [at(interval[0]), at(interval[1])];
   const bar = { kind: 'rect', x: from, y: height * 0.22, width: Math.max(1, to - from), height: height * 0.26 } as const;
   const marks: Mark[] = [zone === 'bounds-only' ? { ...bar, stroke: { pigment, width: 1 } } : { ...bar, fill: pigment }];
-  if (!inside(interval[0])) marks.push(arrowhead('left', ruler));
-  if (!inside(interval[1])) marks.push(arrowhead('right', ruler));
+  if (!inside(interval[0])) marks.push(arrowhead('left', pigment, ruler));
+  if (!inside(interval[1])) marks.push(arrowhead('right', pigment, ruler));
   if (zone !== 'bounds-only' && typeof tension === 'number' && inside(tension)) {
     const x = at(tension);
     marks.push({ kind: 'line', x1: x, x2: x, y1: height * 0.06, y2: height * 0.64, stroke: { pigment, width: 3 } });
@@ -136,10 +136,10 @@ function intervalMarks({ zone, tension, interval }: IntervalBarValues, ruler: Ru
   return marks;
 }
 
-function arrowhead(side: 'left' | 'right', { height, width }: Ruler): Mark {
+function arrowhead(side: 'left' | 'right', pigment: Pigment, { height, width }: Ruler): Mark {
   const [edge, back] = side === 'left' ? [0, 6] : [width, width - 6];
   const [top, middle, foot] = [height * 0.15, height * 0.35, height * 0.55];
-  return { kind: 'path', d: `M${edge} ${middle}L${back} ${top}L${back} ${foot}Z`, fill: 'ink' };
+  return { kind: 'path', d: `M${edge} ${middle}L${back} ${top}L${back} ${foot}Z`, fill: pigment };
 }
 
 function bracketWhisker({ bracket }: IntervalBarValues, { at, height }: Ruler): Mark[] {

@@ -41,7 +41,9 @@ export function useCreateReportMutation(firmId: string, campaignId: string) {
 }
 
 export function useNextRevisionMutation(firmId: string, reportId: string) {
-  return useFirmMutation(firmId, (body: { id: string }) => send('POST', firmPath(firmId, 'reports', reportId, 'revisions'), body, revision));
+  return useFirmMutation(firmId, (body: { id: string }) =>
+    send('POST', firmPath(firmId, 'reports', reportId, 'revisions'), body, revision),
+  );
 }
 
 /** Acts that answer with the whole revision as it stands afterwards. */
@@ -51,8 +53,7 @@ function useRevisionAct<Body>(firmId: string, revisionId: string, method: 'POST'
   );
 }
 
-export const useEditRevisionMutation = (firmId: string, revisionId: string) =>
-  useRevisionAct<EditRevision>(firmId, revisionId, 'PATCH');
+export const useEditRevisionMutation = (firmId: string, revisionId: string) => useRevisionAct<EditRevision>(firmId, revisionId, 'PATCH');
 export const useSubmitMutation = (firmId: string, revisionId: string) =>
   useRevisionAct<SubmitRevision>(firmId, revisionId, 'POST', 'submissions');
 export const useRecallMutation = (firmId: string, revisionId: string) =>

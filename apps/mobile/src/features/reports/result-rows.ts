@@ -35,9 +35,7 @@ export function byUrgency(rows: readonly ResultRow[]): ResultRow[] {
 }
 
 export function countByZone(rows: readonly ResultRow[]): { zone: Zone; count: number }[] {
-  return zonesByUrgency
-    .map((zone) => ({ zone, count: rows.filter((row) => row.zone === zone).length }))
-    .filter(({ count }) => count > 0);
+  return zonesByUrgency.map((zone) => ({ zone, count: rows.filter((row) => row.zone === zone).length })).filter(({ count }) => count > 0);
 }
 
 function barOf(cable: FrozenCable, span: FrozenSpan): IntervalBarValues {
