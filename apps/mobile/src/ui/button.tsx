@@ -1,5 +1,5 @@
 import { Link as RouterLink } from 'expo-router';
-import { useId } from 'react';
+import { createContext, use, useId } from 'react';
 import { Pressable, View, type ViewStyle } from 'react-native';
 import { type ColourName, type Colours, radius, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
@@ -28,10 +28,16 @@ export interface ButtonProps {
   expanded?: boolean;
 }
 
+const WidthContext = createContext<'full' | 'own'>('own');
+
+/** Whether the buttons inside take the width of their container. */
+export const ButtonWidth = WidthContext;
+
 export function Button({ children, onPress, href, kind = 'secondary', why, busy = false, label, wide, expanded }: ButtonProps) {
   const colours = useColours();
   const minHeight = useTargetSize() + (kind === 'primary' ? 4 : 0);
   const whyId = useId();
+  const full = use(WidthContext) === 'full' || wide;
   const off = Boolean(why) || busy;
   const look = looks(colours)[kind];
   const web = webProps({
@@ -47,6 +53,7 @@ export function Button({ children, onPress, href, kind = 'secondary', why, busy 
       onPress={off ? undefined : onPress}
       style={(state) => [
         base,
+        full && { alignSelf: 'stretch' },
         { minHeight, backgroundColor: look.fill, borderColor: look.border },
         kind === 'quiet' && { paddingHorizontal: space(2) },
         isHovered(state) && !off && { backgroundColor: look.hover },
@@ -61,7 +68,7 @@ export function Button({ children, onPress, href, kind = 'secondary', why, busy 
     </Pressable>
   );
   return (
-    <View style={[{ gap: space(1) }, wide ? { alignSelf: 'stretch' } : { alignItems: 'flex-start' }]}>
+    <View style={[{ gap: space(1) }, full ? { alignSelf: 'stretch' } : { alignItems: 'flex-start' }]}>
       {href && !off ? (
         <RouterLink href={href as '/'} asChild>
           {pressable}
@@ -79,7 +86,6 @@ export function Button({ children, onPress, href, kind = 'secondary', why, busy 
 }
 
 const base: ViewStyle = {
-  alignSelf: 'stretch',
   justifyContent: 'center',
   alignItems: 'center',
   paddingHorizontal: space(5),

@@ -46,6 +46,7 @@ export function Head<Row>({ table, columns }: { table: Sortable; columns: readon
                   {...webProps({ 'aria-label': `Sort by ${column.header}` })}
                   style={{
                     minHeight: 28,
+                    width: '100%',
                     flexDirection: 'row',
                     alignItems: 'center',
                     gap: 4,
@@ -93,7 +94,11 @@ export function Body<Row>({ table, columns, hrefOf, rowKey, currentKey }: DataTa
         const current = currentKey !== undefined && rowKey(original) === currentKey;
         const border = index === 0 ? undefined : `${hairline}px solid ${colours.line}`;
         return (
-          <tr key={id} aria-current={current || undefined} style={{ background: current ? colours.wash : undefined }}>
+          <tr
+            key={id}
+            aria-current={current || undefined}
+            style={current ? { background: colours.paper, boxShadow: `inset 4px 0 0 ${colours.verdigris}` } : undefined}
+          >
             {columns.map((column, place) => {
               const edge = { padding, textAlign: alignOf(column), borderTop: border, verticalAlign: 'middle' } as const;
               return place === 0 ? (

@@ -37,7 +37,7 @@ export function Field({ label, hint, error, labelHidden, optional, children }: F
     'aria-describedby': described === '' ? undefined : described,
   };
   return (
-    <View style={{ gap: space(1), minWidth: 0, alignSelf: 'stretch' }}>
+    <View style={{ gap: space(1), minWidth: 0, flexShrink: 1, alignSelf: 'stretch' }}>
       {labelHidden ? null : (
         <label htmlFor={id}>
           <Text strong size="note">

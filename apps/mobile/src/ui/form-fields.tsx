@@ -9,19 +9,20 @@ import { Select, type SelectProps } from './select.tsx';
 import { TextField, type TextFieldProps } from './text-field.tsx';
 
 /** Where a field hangs in a form of react-hook-form. */
-interface Bound<Values extends FieldValues> {
+interface Bound<Values extends FieldValues, Value> {
   control: Control<Values>;
   name: FieldPath<Values>;
   /** A sentence when the value is wrong, null when it is right. */
-  check?: (value: never) => string | null;
+  check?: (value: Value) => string | null;
 }
 
 type Unbound<Props> = Omit<Props, 'value' | 'onChange' | 'onBlur' | 'error'>;
 
-function useBound<Values extends FieldValues>({ control, name, check }: Bound<Values>) {
-  const validate = check === undefined ? undefined : (value: unknown) => check(value as never) ?? true;
+function useBound<Values extends FieldValues, Value>({ control, name, check }: Bound<Values, Value>) {
+  // react-hook-form knows the value as one of all that the form may hold; the field knows which.
+  const validate = check === undefined ? undefined : (value: unknown) => check(value as Value) ?? true;
   const { field, fieldState } = useController({ control, name, ...(validate ? { rules: { validate } } : {}) });
-  // The name of the element that react-hook-form focuses after a refused submission.
+  // inputRef: what react-hook-form focuses after a refused submission.
   return {
     value: field.value,
     onChange: field.onChange,
@@ -31,7 +32,12 @@ function useBound<Values extends FieldValues>({ control, name, check }: Bound<Va
   };
 }
 
-export function FormTextField<Values extends FieldValues>({ control, name, check, ...props }: Bound<Values> & Unbound<TextFieldProps>) {
+export function FormTextField<Values extends FieldValues>({
+  control,
+  name,
+  check,
+  ...props
+}: Bound<Values, string> & Unbound<TextFieldProps>) {
   return <TextField {...props} {...useBound({ control, name, check })} />;
 }
 
@@ -40,7 +46,7 @@ export function FormPasswordField<Values extends FieldValues>({
   name,
   check,
   ...props
-}: Bound<Values> & Unbound<PasswordFieldProps>) {
+}: Bound<Values, string> & Unbound<PasswordFieldProps>) {
   const { inputRef: _, ...bound } = useBound({ control, name, check });
   return <PasswordField {...props} {...bound} />;
 }
@@ -52,10 +58,10 @@ export function FormQuantityField<Values extends FieldValues>({
   check,
   rules,
   ...props
-}: Bound<Values> & Unbound<QuantityFieldProps>) {
+}: Bound<Values, QuantityEntry> & Unbound<QuantityFieldProps>) {
   const { system } = useUnits();
-  const checkEntry = (entry: QuantityEntry) => problemOfEntry(entry, rules, system) ?? check?.(entry as never) ?? null;
-  return <QuantityField {...props} rules={rules} {...useBound({ control, name, check: checkEntry as Bound<Values>['check'] })} />;
+  const checkEntry = (entry: QuantityEntry) => problemOfEntry(entry, rules, system) ?? check?.(entry) ?? null;
+  return <QuantityField {...props} rules={rules} {...useBound({ control, name, check: checkEntry })} />;
 }
 
 export function FormSelect<Values extends FieldValues, Value extends string>({
@@ -63,7 +69,7 @@ export function FormSelect<Values extends FieldValues, Value extends string>({
   name,
   check,
   ...props
-}: Bound<Values> & Unbound<SelectProps<Value>>) {
+}: Bound<Values, Value | null> & Unbound<SelectProps<Value>>) {
   const { inputRef: _, ...bound } = useBound({ control, name, check });
   return <Select {...props} {...bound} />;
 }
@@ -73,12 +79,17 @@ export function FormChoice<Values extends FieldValues, Value extends string>({
   name,
   check,
   ...props
-}: Bound<Values> & Unbound<ChoiceProps<Value>>) {
+}: Bound<Values, Value | null> & Unbound<ChoiceProps<Value>>) {
   const { inputRef: _, onBlur: __, ...bound } = useBound({ control, name, check });
   return <Choice {...props} {...bound} />;
 }
 
-export function FormCheckbox<Values extends FieldValues>({ control, name, check, ...props }: Bound<Values> & Unbound<CheckboxProps>) {
+export function FormCheckbox<Values extends FieldValues>({
+  control,
+  name,
+  check,
+  ...props
+}: Bound<Values, boolean> & Unbound<CheckboxProps>) {
   const { inputRef: _, onBlur: __, ...bound } = useBound({ control, name, check });
   return <Checkbox {...props} {...bound} />;
 }

@@ -15,7 +15,9 @@ interface StackProps {
 
 /** One under the other. */
 export function Stack({ children, gap = 4, align, grow }: StackProps) {
-  return <View style={[{ gap: space(gap), minWidth: 0 }, align && { alignItems: align }, grow && { flex: 1 }]}>{children}</View>;
+  return (
+    <View style={[{ gap: space(gap), minWidth: 0, flexShrink: 1 }, align && { alignItems: align }, grow && { flex: 1 }]}>{children}</View>
+  );
 }
 
 interface RowProps extends StackProps {
@@ -32,6 +34,7 @@ export function Row({ children, gap = 3, align = 'center', justify, wrap = true,
     columnGap: space(gap),
     rowGap: space(2),
     minWidth: 0,
+    flexShrink: 1,
   };
   return <View style={[style, { alignItems: align }, justify && { justifyContent: justify }, grow && { flex: 1 }]}>{children}</View>;
 }

@@ -3,6 +3,7 @@ import { View, type ViewStyle } from 'react-native';
 import { hairline, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
 import { useBarHeight } from './bar-height.tsx';
+import { ButtonWidth } from './button.tsx';
 import { Link } from './link.tsx';
 import { Heading, Text } from './text.tsx';
 import { useWide } from './use-wide.ts';
@@ -40,8 +41,8 @@ export function Page({ title, breadcrumb, actions, status, narrow, children }: P
     gap: space(wide ? 6 : 5),
   };
   return (
-    <View style={{ flexGrow: 1, minWidth: 0 }}>
-      <View role="main" id="main" ref={main} {...webProps({ tabIndex: -1 })} style={style}>
+    <View role="main" id="main" ref={main} {...webProps({ tabIndex: -1 })} style={{ flexGrow: 1, minWidth: 0 }}>
+      <View style={style}>
         <View style={wide ? wideHead : { gap: space(2) }}>
           <View style={{ flexShrink: 1, minWidth: 0, gap: space(1) }}>
             {breadcrumb && breadcrumb.length > 0 ? <Breadcrumb crumbs={breadcrumb} /> : null}
@@ -76,7 +77,7 @@ function FootActions({ children }: { children: ReactNode }) {
   };
   return (
     <View role="group" aria-label="Actions" style={style as unknown as ViewStyle}>
-      {children}
+      <ButtonWidth value="full">{children}</ButtonWidth>
     </View>
   );
 }

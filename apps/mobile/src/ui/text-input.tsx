@@ -70,6 +70,8 @@ function useInputStyle({ invalid, figures, large, rows, readOnly }: TextInputPro
   return {
     minHeight: rows === undefined ? minHeight : undefined,
     minWidth: 0,
+    // An input left to itself is twenty letters wide, whatever its place.
+    width: '100%',
     paddingHorizontal: space(3),
     paddingVertical: space(2),
     backgroundColor: readOnly ? colours.paper : colours.sheet,

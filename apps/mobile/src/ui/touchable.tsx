@@ -20,13 +20,25 @@ export interface TouchableProps {
 export function Touchable({ children, label, href, onPress, current }: TouchableProps) {
   const colours = useColours();
   const minHeight = useTargetSize();
-  const base: ViewStyle = { minHeight, justifyContent: 'center', paddingVertical: space(2), borderRadius: radius };
+  const base: ViewStyle = {
+    minHeight,
+    justifyContent: 'center',
+    paddingVertical: space(2),
+    borderRadius: radius,
+    paddingLeft: space(2),
+    borderLeftWidth: 4,
+    borderLeftColor: 'transparent',
+  };
   const pressable = (
     <Pressable
       role={href ? 'link' : 'button'}
       onPress={onPress}
       {...webProps({ 'aria-label': label, 'aria-current': current || undefined })}
-      style={(state) => [base, (current || ('hovered' in state && state.hovered === true)) && { backgroundColor: colours.wash }]}
+      style={(state) => [
+        base,
+        'hovered' in state && state.hovered === true && { backgroundColor: colours.wash },
+        current && { borderLeftColor: colours.verdigris },
+      ]}
     >
       {children}
     </Pressable>
