@@ -1,12 +1,13 @@
 import { PersistQueryClientProvider } from '@tanstack/react-query-persist-client';
 import { Slot } from 'expo-router';
-import { useEffect } from 'react';
+import { Suspense, useEffect } from 'react';
 import { openOutbox, sendAs } from '../../lib/outbox.ts';
 import { persistOptions, queryClient } from '../../lib/query-client.ts';
 import { registerServiceWorker } from '../../lib/service-worker.ts';
 import { useMeQuery } from '../../lib/session.tsx';
 import { useThemeFonts } from '../../theme/theme-fonts.ts';
 import { ThemeProvider } from '../../theme/use-theme.tsx';
+import { Loading } from '../../ui/index.ts';
 import { UpdatePrompt } from './update-prompt.tsx';
 
 registerServiceWorker();
@@ -20,7 +21,9 @@ export function AppRoot() {
       <PersistQueryClientProvider client={queryClient} persistOptions={persistOptions}>
         <SenderOfOutbox />
         <UpdatePrompt />
-        <Slot />
+        <Suspense fallback={<Loading />}>
+          <Slot />
+        </Suspense>
       </PersistQueryClientProvider>
     </ThemeProvider>
   );

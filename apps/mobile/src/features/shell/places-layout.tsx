@@ -1,9 +1,21 @@
 import { Slot, usePathname } from 'expo-router';
-import { useEffect, useRef } from 'react';
+import { Suspense, useEffect, useRef } from 'react';
 import { View } from 'react-native';
 import { Mark } from '../../drawings/index.ts';
 import { type Membership, useFirm, useMeQuery } from '../../lib/session.tsx';
-import { BarHeight, Link, PlaceBar, type PlaceLink, PlaceRail, placeBarHeight, Row, SkipLink, Text, useWide } from '../../ui/index.ts';
+import {
+  BarHeight,
+  Link,
+  Loading,
+  PlaceBar,
+  type PlaceLink,
+  PlaceRail,
+  placeBarHeight,
+  Row,
+  SkipLink,
+  Text,
+  useWide,
+} from '../../ui/index.ts';
 import { OutboxNote } from './outbox-note.tsx';
 import { placesOf } from './places.ts';
 
@@ -31,7 +43,7 @@ function WideFrame({ firm, places }: FrameProps) {
       <SkipLink />
       <PlaceRail places={places} head={<Name />} foot={<Whereabouts firm={firm} />} />
       <View style={{ flex: 1, minWidth: 0 }}>
-        <Slot />
+        <PlaceSlot />
       </View>
     </View>
   );
@@ -57,11 +69,20 @@ function PhoneFrame({ firm, places }: FrameProps) {
           </Text>
         </View>
         <View style={{ flexGrow: 1, minWidth: 0 }}>
-          <Slot />
+          <PlaceSlot />
         </View>
         <PlaceBar places={places} />
       </View>
     </BarHeight>
+  );
+}
+
+/** The screens come in a chunk of their own; the frame is there at once. */
+function PlaceSlot() {
+  return (
+    <Suspense fallback={<Loading />}>
+      <Slot />
+    </Suspense>
   );
 }
 
