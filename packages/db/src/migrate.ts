@@ -1,0 +1,95 @@
+import { fileURLToPath } from 'node:url';
+import { drizzle } from 'drizzle-orm/node-postgres';
+import { migrate } from 'drizzle-orm/node-postgres/migrator';
+import { runMigrations } from 'graphile-worker';
+import pg from 'pg';
+
+export interface RolePasswords {
+  owner: string;
+  identity: string;
+  app: string;
+  jobs: string;
+}
+
+/** Addresses of one database as each of its roles. */
+export type RoleUrls = Record<keyof RolePasswords, string>;
+
+const roles: Record<keyof RolePasswords, { name: string; rights: string }> = {
+  // Owns the tables. Row-level security is forced on owners too, and functions across firms run as this role.
+  owner: { name: 'strandnote_owner', rights: 'NOSUPERUSER BYPASSRLS' },
+  identity: { name: 'strandnote_identity', rights: 'NOSUPERUSER NOBYPASSRLS' },
+  app: { name: 'strandnote_app', rights: 'NOSUPERUSER NOBYPASSRLS' },
+  jobs: { name: 'strandnote_jobs', rights: 'NOSUPERUSER NOBYPASSRLS' },
+};
+
+/**
+ * Brings a database to the present schema: roles, tables, policies and the job queue. Running it again changes nothing.
+ *
+ * @param superuserUrl address of the database as a superuser
+ * @param passwords of the four roles; set anew each time
+ * @returns addresses of the database as each role
+ */
+export async function prepareDatabase(superuserUrl: string, passwords: RolePasswords): Promise<RoleUrls> {
+  const urls = roleUrls(superuserUrl, passwords);
+  await asSuperuser(superuserUrl, async (client) => {
+    for (const [role, { name, rights }] of Object.entries(roles)) {
+      await client.query(`DO $$ BEGIN CREATE ROLE ${name} LOGIN; EXCEPTION WHEN duplicate_object THEN NULL; END $$`);
+      await client.query(`ALTER ROLE ${name} LOGIN ${rights} PASSWORD ${pg.escapeLiteral(passwords[role as keyof RolePasswords])}`);
+    }
+    const { rows } = await client.query<{ name: string }>('SELECT current_database() AS name');
+    const database = pg.escapeIdentifier(rows[0]!.name);
+    await client.query(`REVOKE ALL ON DATABASE ${database} FROM PUBLIC`);
+    await client.query(`GRANT CONNECT ON DATABASE ${database} TO strandnote_owner, strandnote_identity, strandnote_app, strandnote_jobs`);
+    await client.query(`GRANT CREATE ON DATABASE ${database} TO strandnote_owner, strandnote_jobs`);
+    await client.query('ALTER SCHEMA public OWNER TO strandnote_owner; REVOKE CREATE ON SCHEMA public FROM PUBLIC');
+  });
+  await migrateTables(urls.owner);
+  await runMigrations({ connectionString: urls.jobs });
+  await asSuperuser(superuserUrl, makeQueueDoor);
+  return urls;
+}
+
+function roleUrls(superuserUrl: string, passwords: RolePasswords): RoleUrls {
+  const urlOf = (role: keyof RolePasswords) => {
+    const url = new URL(superuserUrl);
+    url.username = roles[role].name;
+    url.password = passwords[role];
+    return url.toString();
+  };
+  return { owner: urlOf('owner'), identity: urlOf('identity'), app: urlOf('app'), jobs: urlOf('jobs') };
+}
+
+async function migrateTables(ownerUrl: string): Promise<void> {
+  const pool = new pg.Pool({ connectionString: ownerUrl, max: 1 });
+  try {
+    await migrate(drizzle({ client: pool }), { migrationsFolder: fileURLToPath(new URL('../migrations', import.meta.url)) });
+  } finally {
+    await pool.end();
+  }
+}
+
+/** A door into the job queue for the application: whatever it puts in carries the firm and the person of its transaction. */
+async function makeQueueDoor(client: pg.Client): Promise<void> {
+  await client.query(`
+    CREATE OR REPLACE FUNCTION public.enqueue(task text, payload jsonb) RETURNS void
+      LANGUAGE plpgsql SECURITY DEFINER SET search_path = pg_catalog AS $$
+    BEGIN
+      PERFORM graphile_worker.add_job(task, (payload || jsonb_build_object(
+        'firmId', nullif(current_setting('strandnote.firm_id', true), ''),
+        'userId', nullif(current_setting('strandnote.user_id', true), '')))::json);
+    END $$;
+    ALTER FUNCTION public.enqueue(text, jsonb) OWNER TO strandnote_jobs;
+    REVOKE EXECUTE ON FUNCTION public.enqueue(text, jsonb) FROM PUBLIC;
+    GRANT EXECUTE ON FUNCTION public.enqueue(text, jsonb) TO strandnote_app, strandnote_identity;
+    GRANT USAGE ON SCHEMA public TO strandnote_identity, strandnote_jobs`);
+}
+
+async function asSuperuser(url: string, work: (client: pg.Client) => Promise<void>): Promise<void> {
+  const client = new pg.Client({ connectionString: url });
+  await client.connect();
+  try {
+    await work(client);
+  } finally {
+    await client.end();
+  }
+}

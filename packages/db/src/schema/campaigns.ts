@@ -1,0 +1,64 @@
+import { index, integer, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { cables } from './cables.ts';
+import { structures } from './structures.ts';
+import { moment, si, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+
+export interface StoredInstrument {
+  name: string;
+  serial: string;
+  calibratedOn: string | null;
+  calibrationDue: string | null;
+}
+
+export interface StoredBasis {
+  referenceKind: 'design' | 'lift-off' | 'load-cell' | 'last-survey' | 'sister' | null;
+  lowerLimit: number | null;
+  upperLimit: number | null;
+  decisionRule: string;
+  criticalContact: string;
+}
+
+export const campaigns = pgTable(
+  'campaigns',
+  {
+    ...tenantColumns,
+    structureId: uuid('structure_id').notNull(),
+    number: integer('number').notNull(),
+    name: text('name').notNull(),
+    startsOn: text('starts_on').notNull(),
+    endsOn: text('ends_on'),
+    crew: text('crew').notNull().default(''),
+    instruments: jsonb('instruments').notNull().$type<StoredInstrument[]>(),
+    weather: text('weather').notNull().default(''),
+    steelTemperature: si('steel_temperature'),
+    airTemperature: si('air_temperature'),
+    traffic: text('traffic').notNull().default(''),
+    stage: text('stage').notNull(),
+    basis: jsonb('basis').notNull().$type<StoredBasis>(),
+    state: text('state').notNull().default('open').$type<'open' | 'closed'>(),
+    createdAt: moment('created_at').notNull().defaultNow(),
+  },
+  (table) => [
+    tenantKey(table),
+    unique('campaigns_number').on(table.firmId, table.structureId, table.number),
+    withinFirm(table, table.structureId, structures, 'campaigns_structure'),
+  ],
+);
+
+/** The cables that a campaign is to survey, each with the reason where it was not. */
+export const campaignCables = pgTable(
+  'campaign_cables',
+  {
+    ...tenantColumns,
+    campaignId: uuid('campaign_id').notNull(),
+    cableId: uuid('cable_id').notNull(),
+    notMeasuredReason: text('not_measured_reason'),
+  },
+  (table) => [
+    tenantKey(table),
+    unique('campaign_cables_once').on(table.firmId, table.campaignId, table.cableId),
+    index('campaign_cables_by_cable').on(table.firmId, table.cableId),
+    withinFirm(table, table.campaignId, campaigns, 'campaign_cables_campaign'),
+    withinFirm(table, table.cableId, cables, 'campaign_cables_cable'),
+  ],
+);

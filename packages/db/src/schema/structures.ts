@@ -1,0 +1,26 @@
+import { jsonb, pgTable, text, uuid } from 'drizzle-orm/pg-core';
+import { clients } from './clients.ts';
+import { moment, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+
+export interface StoredElevation {
+  deck: { x: number; z: number }[];
+  supports: { x: number; z: number }[][];
+}
+
+export const structures = pgTable(
+  'structures',
+  {
+    ...tenantColumns,
+    name: text('name').notNull(),
+    reference: text('reference').notNull().default(''),
+    kind: text('kind').notNull().$type<'cable-stayed' | 'arch' | 'suspension' | 'roof' | 'mast' | 'other'>(),
+    ownerName: text('owner_name').notNull().default(''),
+    clientId: uuid('client_id'),
+    place: text('place').notNull().default(''),
+    timeZone: text('time_zone').notNull(),
+    elevation: jsonb('elevation').$type<StoredElevation>(),
+    notes: text('notes').notNull().default(''),
+    createdAt: moment('created_at').notNull().defaultNow(),
+  },
+  (table) => [tenantKey(table), withinFirm(table, table.clientId, clients, 'structures_client')],
+);
