@@ -48,7 +48,7 @@ export function Page({ title, breadcrumb, actions, status, narrow, children }: P
             {breadcrumb && breadcrumb.length > 0 ? <Breadcrumb crumbs={breadcrumb} /> : null}
             <Heading level={1}>{title}</Heading>
           </View>
-          <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', gap: space(3) }}>
+          <View style={{ flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-start', gap: space(3) }}>
             {status}
             {wide ? actions : null}
           </View>

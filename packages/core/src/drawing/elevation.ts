@@ -37,7 +37,6 @@ export interface ElevationFigure extends Figure {
 }
 
 const margin = 12;
-const signSize = 18;
 
 /**
  * The elevation: deck and supports in heavy ink, each cable as a line whose form tells its zone, a sign at those that need a look.
@@ -61,7 +60,7 @@ export function elevation(input: ElevationInput, sheet: { width: number; maxHeig
     ...input.supports.map((support) => heavy(support.map(place), 5)),
     heavy(input.deck.map(place), 4),
     ...byWeight.map(({ x1, y1, x2, y2, zone }): Mark => ({ kind: 'line', x1, y1, x2, y2, stroke: zoneStyle(zone).line })),
-    ...signs(byWeight),
+    ...signs(byWeight, sheet.width < 500 ? 14 : 18),
   ];
   return { width: sheet.width, height, marks: marks.filter((mark) => mark.kind !== 'path' || mark.d !== ''), lines };
 }
@@ -101,15 +100,16 @@ function heavy(points: readonly Place[], width: number): Mark {
 }
 
 /** A sign on each line that needs one, where it covers no other sign: a third of the way up, or further along. */
-function signs(lines: readonly ElevationLine[]): Mark[] {
+function signs(lines: readonly ElevationLine[], size: number): Mark[] {
   const taken: Place[] = [];
   return lines.flatMap((line) => {
     const { sign } = zoneStyle(line.zone);
     if (sign === null) return [];
     const at =
-      [0.33, 0.45, 0.57, 0.22, 0.69, 0.81].map((share) => along(line, share)).find((place) => isFree(place, taken)) ?? along(line, 0.33);
+      [0.33, 0.45, 0.57, 0.22, 0.69, 0.81].map((share) => along(line, share)).find((place) => isFree(place, taken, size)) ??
+      along(line, 0.33);
     taken.push(at);
-    return signMarks(sign, at, zoneStyle(line.zone).line.pigment);
+    return signMarks(sign, at, size, zoneStyle(line.zone).line.pigment);
   });
 }
 
@@ -117,14 +117,14 @@ function along({ x1, y1, x2, y2 }: ElevationLine, share: number): Place {
   return { x: x1 + (x2 - x1) * share, y: y1 + (y2 - y1) * share };
 }
 
-function isFree(place: Place, taken: readonly Place[]): boolean {
-  return taken.every((other) => Math.abs(other.x - place.x) > signSize + 2 || Math.abs(other.y - place.y) > signSize + 2);
+function isFree(place: Place, taken: readonly Place[], size: number): boolean {
+  return taken.every((other) => Math.abs(other.x - place.x) > size + 2 || Math.abs(other.y - place.y) > size + 2);
 }
 
-function signMarks(sign: string, { x, y }: Place, pigment: Extract<Mark, { kind: 'text' }>['pigment']): Mark[] {
-  const width = sign.length > 1 ? signSize * 1.3 : signSize;
+function signMarks(sign: string, { x, y }: Place, size: number, pigment: Extract<Mark, { kind: 'text' }>['pigment']): Mark[] {
+  const width = sign.length > 1 ? size * 1.3 : size;
   return [
-    { kind: 'rect', x: x - width / 2, y: y - signSize / 2, width, height: signSize, fill: 'sheet', stroke: { pigment, width: 1 } },
-    { kind: 'text', x, y: y + 5, text: sign, size: 14, anchor: 'middle', pigment, font: 'text-strong' },
+    { kind: 'rect', x: x - width / 2, y: y - size / 2, width, height: size, fill: 'sheet', stroke: { pigment, width: 1 } },
+    { kind: 'text', x, y: y + size * 0.28, text: sign, size: size * 0.78, anchor: 'middle', pigment, font: 'text-strong' },
   ];
 }

@@ -1,6 +1,7 @@
 import { PersistQueryClientProvider } from '@tanstack/react-query-persist-client';
 import { Slot } from 'expo-router';
 import { Suspense, useEffect } from 'react';
+import { config } from 'zod';
 import { openOutbox, sendAs } from '../../lib/outbox.ts';
 import { persistOptions, queryClient } from '../../lib/query-client.ts';
 import { registerServiceWorker } from '../../lib/service-worker.ts';
@@ -10,6 +11,8 @@ import { ThemeProvider } from '../../theme/use-theme.tsx';
 import { Loading } from '../../ui/index.ts';
 import { UpdatePrompt } from './update-prompt.tsx';
 
+// Left to itself zod tries whether it may compile with eval, which the Content Security Policy forbids and reports.
+config({ jitless: true });
 registerServiceWorker();
 openOutbox().catch((error: unknown) => console.error(error));
 
