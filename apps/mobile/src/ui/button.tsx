@@ -1,8 +1,8 @@
-import { Link as RouterLink } from 'expo-router';
 import { createContext, use, useId } from 'react';
 import { Pressable, View, type ViewStyle } from 'react-native';
 import { type ColourName, type Colours, radius, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
+import { useLinkPress } from './link-press.ts';
 import { useTargetSize } from './target-size.tsx';
 import { Text } from './text.tsx';
 import { webProps } from './web-props.ts';
@@ -47,10 +47,12 @@ export function Button({ children, onPress, href, kind = 'secondary', why, busy 
     'aria-label': label,
     'aria-expanded': expanded,
   });
+  const link = useLinkPress(off ? undefined : href);
   const pressable = (
     <Pressable
-      role={href ? 'link' : 'button'}
+      role={href && !off ? 'link' : 'button'}
       onPress={off ? undefined : onPress}
+      {...link}
       style={(state) => [
         base,
         full && { alignSelf: 'stretch' },
@@ -69,13 +71,7 @@ export function Button({ children, onPress, href, kind = 'secondary', why, busy 
   );
   return (
     <View style={[{ gap: space(1) }, full ? { alignSelf: 'stretch' } : { alignItems: 'flex-start' }]}>
-      {href && !off ? (
-        <RouterLink href={href as '/'} asChild>
-          {pressable}
-        </RouterLink>
-      ) : (
-        pressable
-      )}
+      {pressable}
       {why ? (
         <Text id={whyId} size="note" tone="muted">
           {why}

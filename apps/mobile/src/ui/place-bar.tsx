@@ -1,7 +1,7 @@
-import { Link as RouterLink } from 'expo-router';
 import { Pressable, View, type ViewStyle } from 'react-native';
 import { hairline, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
+import { useLinkPress } from './link-press.ts';
 import { Text } from './text.tsx';
 import { webProps } from './web-props.ts';
 
@@ -30,18 +30,24 @@ export function PlaceBar({ places }: { places: readonly PlaceLink[] }) {
   return (
     <View {...webProps({ role: 'navigation', 'aria-label': 'Places' })} style={style as unknown as ViewStyle}>
       {places.map((place) => (
-        <RouterLink key={place.href} href={place.href as '/'} asChild>
-          <Pressable role="link" {...webProps({ 'aria-current': place.current ? 'page' : undefined })} style={item}>
-            <View style={{ height: 4, width: 32, backgroundColor: place.current ? colours.verdigris : 'transparent' }} />
-            <View style={{ flex: 1, justifyContent: 'center' }}>
-              <Text size="note" strong={place.current} tone={place.current ? 'verdigris' : 'muted'}>
-                {place.label}
-              </Text>
-            </View>
-          </Pressable>
-        </RouterLink>
+        <BarItem key={place.href} place={place} />
       ))}
     </View>
+  );
+}
+
+function BarItem({ place }: { place: PlaceLink }) {
+  const colours = useColours();
+  const link = useLinkPress(place.href);
+  return (
+    <Pressable role="link" {...link} {...webProps({ 'aria-current': place.current ? 'page' : undefined })} style={item}>
+      <View style={{ height: 4, width: 32, backgroundColor: place.current ? colours.verdigris : 'transparent' }} />
+      <View style={{ flex: 1, justifyContent: 'center' }}>
+        <Text size="note" strong={place.current} tone={place.current ? 'verdigris' : 'muted'}>
+          {place.label}
+        </Text>
+      </View>
+    </Pressable>
   );
 }
 

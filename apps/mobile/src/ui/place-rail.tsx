@@ -1,8 +1,8 @@
-import { Link as RouterLink } from 'expo-router';
 import type { ReactNode } from 'react';
 import { Pressable, View, type ViewStyle } from 'react-native';
 import { hairline, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
+import { useLinkPress } from './link-press.ts';
 import type { PlaceLink } from './place-bar.tsx';
 import { Text } from './text.tsx';
 import { webProps } from './web-props.ts';
@@ -30,35 +30,39 @@ export function PlaceRail({ places, head, foot }: PlaceRailProps) {
   };
   return (
     <View style={style as unknown as ViewStyle}>
-      <View style={{ padding: space(5), paddingBottom: space(6) }}>{head}</View>
+      <View role="banner" style={{ padding: space(5), paddingBottom: space(6) }}>
+        {head}
+      </View>
       <View {...webProps({ role: 'navigation', 'aria-label': 'Places' })} style={{ flexGrow: 1 }}>
         {places.map((place) => (
           <RailItem key={place.href} place={place} />
         ))}
       </View>
-      <View style={{ padding: space(5), gap: space(2) }}>{foot}</View>
+      <View role="contentinfo" style={{ padding: space(5), gap: space(2) }}>
+        {foot}
+      </View>
     </View>
   );
 }
 
 function RailItem({ place }: { place: PlaceLink }) {
   const colours = useColours();
+  const link = useLinkPress(place.href);
   return (
-    <RouterLink href={place.href as '/'} asChild>
-      <Pressable
-        role="link"
-        {...webProps({ 'aria-current': place.current ? 'page' : undefined })}
-        style={(state) => [
-          railItem,
-          place.current && { backgroundColor: colours.wash, borderLeftColor: colours.verdigris },
-          'hovered' in state && Boolean(state.hovered) && { backgroundColor: colours.wash },
-        ]}
-      >
-        <Text strong={place.current} tone={place.current ? 'verdigris' : 'ink'}>
-          {place.label}
-        </Text>
-      </Pressable>
-    </RouterLink>
+    <Pressable
+      role="link"
+      {...link}
+      {...webProps({ 'aria-current': place.current ? 'page' : undefined })}
+      style={(state) => [
+        railItem,
+        place.current && { backgroundColor: colours.wash, borderLeftColor: colours.verdigris },
+        'hovered' in state && Boolean(state.hovered) && { backgroundColor: colours.wash },
+      ]}
+    >
+      <Text strong={place.current} tone={place.current ? 'verdigris' : 'ink'}>
+        {place.label}
+      </Text>
+    </Pressable>
   );
 }
 

@@ -1,8 +1,8 @@
-import { Link as RouterLink } from 'expo-router';
 import type { ReactNode } from 'react';
 import { Pressable, type ViewStyle } from 'react-native';
 import { radius, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
+import { useLinkPress } from './link-press.ts';
 import { useTargetSize } from './target-size.tsx';
 import { webProps } from './web-props.ts';
 
@@ -29,10 +29,12 @@ export function Touchable({ children, label, href, onPress, current }: Touchable
     borderLeftWidth: 4,
     borderLeftColor: 'transparent',
   };
-  const pressable = (
+  const link = useLinkPress(href);
+  return (
     <Pressable
       role={href ? 'link' : 'button'}
       onPress={onPress}
+      {...link}
       {...webProps({ 'aria-label': label, 'aria-current': current || undefined })}
       style={(state) => [
         base,
@@ -42,11 +44,5 @@ export function Touchable({ children, label, href, onPress, current }: Touchable
     >
       {children}
     </Pressable>
-  );
-  if (!href) return pressable;
-  return (
-    <RouterLink href={href as '/'} asChild>
-      {pressable}
-    </RouterLink>
   );
 }
