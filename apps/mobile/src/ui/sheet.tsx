@@ -1,4 +1,4 @@
-import { type ReactNode, useEffect, useId, useRef } from 'react';
+import { type ReactNode, useId, useLayoutEffect, useRef } from 'react';
 import { View } from 'react-native';
 import { hairline, radius, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
@@ -23,10 +23,15 @@ export function Sheet({ title, children, onClose, actions, holds }: SheetProps) 
   const dialog = useRef<HTMLDialogElement>(null);
   const titleId = useId();
   const style = useSheetStyle();
-  useEffect(() => {
+  // A layout effect: it is undone while the dialog is still in the page, so that the focus can go back to what opened it.
+  useLayoutEffect(() => {
+    const opener = document.activeElement;
     const element = dialog.current;
     element?.showModal();
-    return () => element?.close();
+    return () => {
+      element?.close();
+      if (opener instanceof HTMLElement) opener.focus();
+    };
   }, []);
   return (
     // biome-ignore lint/a11y/useKeyWithClickEvents: the keyboard closes it with Escape, which arrives as `cancel`
