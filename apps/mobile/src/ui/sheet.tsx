@@ -75,6 +75,7 @@ function useSheetStyle() {
     boxSizing: 'border-box' as const,
     maxHeight: '90dvh',
     overflow: 'auto',
+    overscrollBehavior: 'contain' as const,
     padding: 0,
     background: colours.paper,
     color: colours.ink,

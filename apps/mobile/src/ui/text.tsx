@@ -55,7 +55,7 @@ export function Heading({ children, level, size, id, tone = 'ink' }: HeadingProp
   const fontSize = fontSizes[size ?? headingSizes[level]];
   const style: TextStyle = { fontFamily: fonts.textStrong, fontSize, lineHeight: Math.round(fontSize * 1.2), color: colours[tone] };
   return (
-    <NativeText role="heading" style={style} {...webProps({ 'aria-level': level, id, tabIndex: level === 1 ? -1 : undefined })}>
+    <NativeText role="heading" style={style} {...webProps({ 'aria-level': level, id })}>
       <InsideText value={true}>{children}</InsideText>
     </NativeText>
   );

@@ -4,7 +4,7 @@ import { useForm } from 'react-hook-form';
 import { showProblem } from '../../lib/form-problems.ts';
 import { Button, Definitions, Form, FormPasswordField, Loading, Notice, Page, Problem, Stack } from '../../ui/index.ts';
 import { useAcceptInvitationMutation, useInvitationQuery } from './account.api.ts';
-import { problemOfNewPassword } from './new-password.ts';
+import { problemOfNewPassword } from './password-rules.ts';
 
 export function InvitationScreen() {
   const { token } = useLocalSearchParams<{ token: string }>();

@@ -3,7 +3,7 @@ import { useForm } from 'react-hook-form';
 import { showProblem } from '../../lib/form-problems.ts';
 import { Button, Form, FormPasswordField, Link, Notice, Page, Stack } from '../../ui/index.ts';
 import { useResetPasswordMutation } from './account.api.ts';
-import { problemOfNewPassword } from './new-password.ts';
+import { problemOfNewPassword } from './password-rules.ts';
 
 export function ResetPasswordScreen() {
   const { token } = useLocalSearchParams<{ token?: string }>();
