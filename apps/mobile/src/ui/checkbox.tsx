@@ -1,7 +1,7 @@
 import { useId } from 'react';
 import { Pressable, View } from 'react-native';
 import Svg, { Path } from 'react-native-svg';
-import { space } from '../theme/tokens.ts';
+import { type ColourName, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
 import { useTargetSize } from './target-size.tsx';
 import { Text } from './text.tsx';
@@ -18,7 +18,6 @@ export interface CheckboxProps {
 }
 
 export function Checkbox({ label, value, onChange, hint, error, why }: CheckboxProps) {
-  const colours = useColours();
   const minHeight = useTargetSize();
   const id = useId();
   const note = error ?? why ?? hint;
@@ -36,22 +35,7 @@ export function Checkbox({ label, value, onChange, hint, error, why }: CheckboxP
         onPress={why ? undefined : () => onChange(!value)}
         style={{ flexDirection: 'row', alignItems: 'center', gap: space(2), minHeight }}
       >
-        <View
-          style={{
-            width: 22,
-            height: 22,
-            borderRadius: 3,
-            borderWidth: 1.5,
-            borderColor: error ? colours.minium : why ? colours.muted : value ? colours.verdigris : colours.ink,
-            backgroundColor: value ? colours.verdigris : colours.sheet,
-          }}
-        >
-          {value ? (
-            <Svg width={19} height={19} viewBox="0 0 20 20" aria-hidden>
-              <Path d="M4 10.5 8.5 15 16 5.5" fill="none" stroke={colours.onVerdigris} strokeWidth={2.2} />
-            </Svg>
-          ) : null}
-        </View>
+        <Box ticked={value} edge={error ? 'minium' : why ? 'muted' : value ? 'verdigris' : 'ink'} />
         <View style={{ flexShrink: 1 }}>
           <Text>{label}</Text>
         </View>
@@ -60,6 +44,20 @@ export function Checkbox({ label, value, onChange, hint, error, why }: CheckboxP
         <Text id={id} size="note" tone={error ? 'minium' : 'muted'} strong={Boolean(error)}>
           {note}
         </Text>
+      ) : null}
+    </View>
+  );
+}
+
+function Box({ ticked, edge }: { ticked: boolean; edge: ColourName }) {
+  const colours = useColours();
+  const backgroundColor = ticked ? colours.verdigris : colours.sheet;
+  return (
+    <View style={{ width: 22, height: 22, borderRadius: 3, borderWidth: 1.5, borderColor: colours[edge], backgroundColor }}>
+      {ticked ? (
+        <Svg width={19} height={19} viewBox="0 0 20 20" aria-hidden>
+          <Path d="M4 10.5 8.5 15 16 5.5" fill="none" stroke={colours.onVerdigris} strokeWidth={2.2} />
+        </Svg>
       ) : null}
     </View>
   );

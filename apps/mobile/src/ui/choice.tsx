@@ -2,7 +2,7 @@ import { useId } from 'react';
 import { Pressable, View } from 'react-native';
 import { space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
-import type { FieldProps } from './field.tsx';
+import { FieldNotes, type FieldProps, idsOfNotes } from './field.tsx';
 import type { Option } from './select.tsx';
 import { useTargetSize } from './target-size.tsx';
 import { Text } from './text.tsx';
@@ -20,11 +20,10 @@ export interface ChoiceProps<Value extends string> extends Omit<FieldProps, 'lab
 /** One of a few, all of them in sight. Arrow keys move between them. */
 export function Choice<Value extends string>({ label, hint, error, optional, value, onChange, options, row }: ChoiceProps<Value>) {
   const id = useId();
-  const described = [error ? `${id}-error` : null, hint ? `${id}-hint` : null].filter(Boolean).join(' ');
   const group = webProps({
     role: 'radiogroup',
     'aria-labelledby': id,
-    'aria-describedby': described === '' ? undefined : described,
+    'aria-describedby': idsOfNotes({ id, error, hint }),
     'aria-invalid': error ? true : undefined,
     onKeyDown: (event: KeyboardEvent) =>
       moveWithArrows(
@@ -50,16 +49,7 @@ export function Choice<Value extends string>({ label, hint, error, optional, val
           />
         ))}
       </View>
-      {error ? (
-        <Text id={`${id}-error`} size="note" tone="minium" strong live>
-          {error}
-        </Text>
-      ) : null}
-      {hint ? (
-        <Text id={`${id}-hint`} size="note" tone="muted">
-          {hint}
-        </Text>
-      ) : null}
+      <FieldNotes id={id} error={error} hint={hint} />
     </View>
   );
 }

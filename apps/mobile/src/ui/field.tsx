@@ -28,13 +28,10 @@ interface FieldFrameProps extends FieldProps {
 /** Label above, control, then the error or the hint, tied together for those who hear the page. */
 export function Field({ label, hint, error, labelHidden, optional, children }: FieldFrameProps) {
   const id = useId();
-  const hintId = `${id}-hint`;
-  const errorId = `${id}-error`;
-  const described = [error ? errorId : null, hint ? hintId : null].filter(Boolean).join(' ');
   const aria = {
     'aria-label': labelHidden ? label : undefined,
     'aria-invalid': error ? true : undefined,
-    'aria-describedby': described === '' ? undefined : described,
+    'aria-describedby': idsOfNotes({ id, error, hint }),
   };
   return (
     <View style={{ gap: space(1), minWidth: 0, flexShrink: 1, alignSelf: 'stretch' }}>
@@ -51,16 +48,38 @@ export function Field({ label, hint, error, labelHidden, optional, children }: F
         </label>
       )}
       {children({ id, aria })}
+      <FieldNotes id={id} error={error} hint={hint} />
+    </View>
+  );
+}
+
+interface Notes {
+  /** Of the field that they belong to. */
+  id: string;
+  error: string | null | undefined;
+  hint: string | undefined;
+}
+
+/** What `aria-describedby` of a control names. */
+export function idsOfNotes({ id, error, hint }: Notes): string | undefined {
+  const ids = [error ? `${id}-error` : null, hint ? `${id}-hint` : null].filter(Boolean).join(' ');
+  return ids === '' ? undefined : ids;
+}
+
+/** What is wrong, and what to type, under a control. */
+export function FieldNotes({ id, error, hint }: Notes) {
+  return (
+    <>
       {error ? (
-        <Text id={errorId} size="note" tone="minium" strong live>
+        <Text id={`${id}-error`} size="note" tone="minium" strong live>
           {error}
         </Text>
       ) : null}
       {hint ? (
-        <Text id={hintId} size="note" tone="muted">
+        <Text id={`${id}-hint`} size="note" tone="muted">
           {hint}
         </Text>
       ) : null}
-    </View>
+    </>
   );
 }
