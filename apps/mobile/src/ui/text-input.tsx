@@ -28,8 +28,11 @@ export interface TextInputProps {
 
 /** The bare control that the fields of ui/ are made of. */
 export function TextInput(props: TextInputProps) {
-  const { wiring, value, onChange, onBlur, rows, maxLength, inputMode, autoComplete, secret, readOnly, inputRef, onKeyPress } = props;
+  const { wiring, value, onChange, onBlur, rows, maxLength, inputMode, autoComplete, secret, readOnly, inputRef, onKeyPress, figures } =
+    props;
   const submit = useSubmit();
+  // A phone that makes a capital or another word of an address, a password or a figure spoils it.
+  const literal = secret || figures || inputMode === 'email';
   const style = useInputStyle(props);
   return (
     <NativeInput
@@ -40,6 +43,7 @@ export function TextInput(props: TextInputProps) {
       multiline={rows !== undefined}
       secureTextEntry={secret}
       readOnly={readOnly}
+      {...(literal ? { autoCapitalize: 'none', autoCorrect: false, spellCheck: false } : {})}
       submitBehavior={rows === undefined ? 'submit' : 'newline'}
       onSubmitEditing={rows === undefined ? submit : undefined}
       onKeyPress={onKeyPress}

@@ -72,7 +72,8 @@ function DemonstrationNote() {
   if (!data?.demonstration) return null;
   return (
     <Notice title="A demonstration">
-      The bridges, people and surveys in it are invented. Its accounts and passwords were printed where the server was started.
+      <Text>The bridges, people and surveys in it are invented. Its accounts and passwords were printed where the server was started.</Text>
+      <Link href="/demonstration/mail">Read the mail that it sent</Link>
     </Notice>
   );
 }
