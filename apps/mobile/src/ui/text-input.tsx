@@ -1,4 +1,4 @@
-import type { ComponentProps, Ref } from 'react';
+import type { ComponentProps, ReactNode, Ref } from 'react';
 import { TextInput as NativeInput, type TextStyle } from 'react-native';
 import { fontSizes, fonts, hairline, radius, space } from '../theme/tokens.ts';
 import { useColours } from '../theme/use-theme.tsx';
@@ -34,7 +34,7 @@ export function TextInput(props: TextInputProps) {
   // A phone that makes a capital or another word of an address, a password or a figure spoils it.
   const literal = secret || figures || inputMode === 'email';
   const style = useInputStyle(props);
-  return (
+  const input = (
     <NativeInput
       ref={inputRef}
       value={value}
@@ -44,7 +44,6 @@ export function TextInput(props: TextInputProps) {
       secureTextEntry={secret}
       readOnly={readOnly}
       {...(literal ? { autoCapitalize: 'none', autoCorrect: false, spellCheck: false } : {})}
-      submitBehavior={rows === undefined ? 'submit' : 'newline'}
       onSubmitEditing={rows === undefined ? submit : undefined}
       onKeyPress={onKeyPress}
       {...(maxLength === undefined ? {} : { maxLength })}
@@ -53,19 +52,28 @@ export function TextInput(props: TextInputProps) {
         id: wiring.id,
         rows,
         autoComplete,
+        // Enter submits; who has to mend something is still in the field.
+        blurOnSubmit: false,
         ...wiring.aria,
-        ...(props.onPaste ? { onPaste: pasteHandler(props.onPaste) } : {}),
       })}
       style={style}
     />
   );
+  return props.onPaste ? <PasteCatcher take={props.onPaste}>{input}</PasteCatcher> : input;
 }
 
-/** Hands pasted text over first; what is taken is not pasted into the field as well. */
-function pasteHandler(take: (text: string) => boolean) {
-  return (event: ClipboardEvent) => {
-    if (take(event.clipboardData?.getData('text') ?? '')) event.preventDefault();
-  };
+/** Hands pasted text over first; what is taken is not pasted into the field as well. React Native Web's input does not pass the event on. */
+function PasteCatcher({ take, children }: { take: (text: string) => boolean; children: ReactNode }) {
+  return (
+    <div
+      style={{ display: 'flex', minWidth: 0 }}
+      onPaste={(event) => {
+        if (take(event.clipboardData.getData('text'))) event.preventDefault();
+      }}
+    >
+      {children}
+    </div>
+  );
 }
 
 function useInputStyle({ invalid, figures, large, rows, readOnly }: TextInputProps): TextStyle {
