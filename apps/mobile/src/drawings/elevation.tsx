@@ -9,6 +9,8 @@ import {
 import { useRouter } from 'expo-router';
 import { type KeyboardEvent, type MouseEvent, useMemo, useState } from 'react';
 import { View } from 'react-native';
+import { fonts } from '../theme/tokens.ts';
+import { useColours } from '../theme/use-theme.tsx';
 import { Stack, Text } from '../ui/index.ts';
 import { Figure } from './figure.tsx';
 import { Measured } from './measured.tsx';
@@ -106,21 +108,44 @@ interface CableLinkProps {
   onFollow: (event: MouseEvent, href: string) => void;
 }
 
+/** Under the pointer or with the focus the line is banded and named: a ring around its box would point at half the fan. */
 function CableLink({ line, name, href, reachable, onFollow }: CableLinkProps) {
+  const { verdigris } = useColours();
+  const [pointed, setPointed] = useState(false);
+  const ends = { x1: line.x1, y1: line.y1, x2: line.x2, y2: line.y2 };
   return (
-    <a href={href} aria-label={name} tabIndex={reachable ? 0 : -1} onClick={(event) => onFollow(event, href)}>
-      <title>{name}</title>
-      <line
-        x1={line.x1}
-        y1={line.y1}
-        x2={line.x2}
-        y2={line.y2}
-        stroke="transparent"
-        strokeWidth={14}
-        strokeLinecap="round"
-        pointerEvents="stroke"
-      />
+    <a
+      href={href}
+      aria-label={name}
+      tabIndex={reachable ? 0 : -1}
+      onClick={(event) => onFollow(event, href)}
+      onFocus={() => setPointed(true)}
+      onBlur={() => setPointed(false)}
+      onMouseEnter={() => setPointed(true)}
+      onMouseLeave={() => setPointed(false)}
+      style={{ outline: 'none' }}
+    >
+      <line {...ends} stroke="transparent" strokeWidth={14} strokeLinecap="round" pointerEvents="stroke" />
+      {pointed ? (
+        <line {...ends} stroke={verdigris} strokeOpacity={0.45} strokeWidth={9} strokeLinecap="round" pointerEvents="none" />
+      ) : null}
+      {pointed ? <NameOfLine line={line} /> : null}
     </a>
+  );
+}
+
+function NameOfLine({ line }: { line: ElevationLine }) {
+  const { sheet, ink } = useColours();
+  const width = line.reference.length * 9 + 12;
+  const x = (line.x1 + line.x2) / 2;
+  const y = Math.max(14, (line.y1 + line.y2) / 2 - 20);
+  return (
+    <g pointerEvents="none">
+      <rect x={x - width / 2} y={y - 14} width={width} height={22} fill={sheet} stroke={ink} strokeWidth={1} />
+      <text x={x} y={y + 2} textAnchor="middle" fontSize={14} fontFamily={fonts.figuresStrong} fill={ink}>
+        {line.reference}
+      </text>
+    </g>
   );
 }
 
