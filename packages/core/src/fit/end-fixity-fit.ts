@@ -1,0 +1,152 @@
+/**
+ * Quadrature over what the frequencies can hardly tell: the fixity of the ends, and bending stiffness where they leave it open.
+ *
+ * For slender cables an end of fixity η acts like a shortening by η ℓ, ℓ = √(EI/T), the same for every mode: T and η cannot
+ * be told apart, and choosing an η hides an error larger than everything else. So the fit runs at every node of a quadrature
+ * (./fixity-nodes), each node weighted by its evidence (Laplace)
+ *
+ *   w ∝ p(η) p(EI) exp(−χ²/2) |C|^{1/2}
+ *
+ * and the answer is the mixture. Bending stiffness is fitted in the node where a log-normal prior and the frequencies
+ * determine it (ln sd ≤ 0.2); otherwise it is integrated over too. The change of the answer with an input p follows by
+ * implicit differentiation: within a node δt = −[C Jᵀ W ∂ln f/∂p]_t, and through the weights Cov(t, Σ W r ∂ln f/∂p).
+ *
+ * Sources: JCGM 100:2008 and 101:2008 for the propagation; the mixture is the product's own, calibrated by simulation.
+ */
+import type { FitProblem } from './fit-problem.ts';
+import { type FixityNode, gaussLegendre } from './fixity-nodes.ts';
+import { evaluateModel, fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace, type StiffnessFreedom } from './node-fit.ts';
+import { logPrior, type StiffnessPlan } from './stiffness-plan.ts';
+
+/** One component of the posterior. */
+export interface PosteriorNode {
+  node: FixityNode;
+  /** Index of the fixity node: components of one fixity share it. */
+  group: number;
+  logWeight: number;
+  fit: NodeFit;
+  /** Parts of the variance of t within the node: from frequencies, from the prior on EI. */
+  frequencyVariance: number;
+  priorVariance: number;
+  /** ∂t/∂ln L and ∂t/∂ln m within the node, and slopes of the log-evidence by both. */
+  byLength: number;
+  byMass: number;
+  evidenceByLength: number;
+  evidenceByMass: number;
+}
+
+/** Nodes of ln EI that a range is covered with. */
+const stiffnessNodes = 12;
+
+/**
+ * Fits every node.
+ *
+ * @param problem peaks, weights and prior
+ * @param nodes of fixity, with prior shares
+ * @param plan how ln EI is treated
+ * @param work room for the inner loop
+ * @param correction sag and attachments, where there are any
+ * @returns components with unnormalised log weights
+ */
+export function fitFixity(
+  problem: FitProblem,
+  nodes: readonly FixityNode[],
+  plan: StiffnessPlan,
+  work: NodeWorkspace,
+  correction: ModelCorrection | null,
+): PosteriorNode[] {
+  const components: PosteriorNode[] = [];
+  let start = { logTension: plan.start.logTension, logStiffness: plan.start.logStiffness };
+  nodes.forEach((node, group) => {
+    const first = components.length;
+    if (plan.kind === 'integrated') integrateStiffness(problem, node, group, plan, start, work, correction, components);
+    else {
+      const freedom: StiffnessFreedom = plan.kind === 'fixed' ? { kind: 'fixed' } : { kind: 'free', mean: plan.mean, weight: plan.weight };
+      const fit = fitNode(problem, node.first, node.second, start, freedom, work, correction);
+      components.push(component(problem, node, group, fit, freedom, Math.log(node.prior), work, correction));
+    }
+    const begun = components[first]!.fit;
+    start = { logTension: begun.logTension, logStiffness: begun.logStiffness };
+  });
+  return components;
+}
+
+function integrateStiffness(
+  problem: FitProblem,
+  node: FixityNode,
+  group: number,
+  plan: StiffnessPlan & { kind: 'integrated' },
+  start: { logTension: number; logStiffness: number },
+  work: NodeWorkspace,
+  correction: ModelCorrection | null,
+  components: PosteriorNode[],
+): void {
+  const [low, high] = plan.range;
+  const rule = gaussLegendre(stiffnessNodes);
+  let previous = start;
+  rule.nodes.forEach((u, i) => {
+    const logStiffness = low + (high - low) * u;
+    const from = { logTension: previous.logTension, logStiffness };
+    const fit = fitNode(problem, node.first, node.second, from, { kind: 'fixed' }, work, correction);
+    const share = Math.log(node.prior * rule.weights[i]!) + logPrior(problem.prior, logStiffness);
+    components.push(component(problem, node, group, fit, { kind: 'fixed' }, share, work, correction));
+    const ahead = rule.nodes[i + 1];
+    // Along the valley of best tension the next node starts almost at its answer.
+    previous = {
+      logTension: fit.logTension + (ahead === undefined ? 0 : fit.valley * (high - low) * (ahead - u)),
+      logStiffness,
+    };
+  });
+}
+
+/** Weight and sensitivities of one fitted node. */
+function component(
+  problem: FitProblem,
+  node: FixityNode,
+  group: number,
+  fit: NodeFit,
+  freedom: StiffnessFreedom,
+  logShare: number,
+  work: NodeWorkspace,
+  correction: ModelCorrection | null,
+): PosteriorNode {
+  evaluateModel(problem, node.first, node.second, fit.logTension, fit.logStiffness, work, correction);
+  const { weights } = problem;
+  const free = freedom.kind === 'free';
+  let [tL, eL, tM, eM, hL, hM, tt, te, ee] = [0, 0, 0, 0, 0, 0, 0, 0, 0];
+  for (let i = 0; i < weights.length; i++) {
+    const [w, jt, je, jl, r] = [weights[i]!, work.byTension[i]!, work.byStiffness[i]!, work.byLength[i]!, work.residuals[i]!];
+    tL += w * jt * jl;
+    eL += w * je * jl;
+    tM -= 0.5 * w * jt;
+    eM -= 0.5 * w * je;
+    hL += w * r * jl;
+    hM -= 0.5 * w * r;
+    tt += w * jt * jt;
+    te += w * jt * je;
+    ee += w * je * je;
+  }
+  const [ctt, cte] = [fit.varianceTension, free ? fit.covariance : 0];
+  const determinant = free ? fit.varianceTension * fit.varianceStiffness - fit.covariance ** 2 : fit.varianceTension;
+  return {
+    node,
+    group,
+    logWeight: logShare - fit.objective / 2 + 0.5 * Math.log(determinant),
+    fit,
+    frequencyVariance: free ? ctt * ctt * tt + 2 * ctt * cte * te + cte * cte * ee : ctt,
+    priorVariance: free ? cte * cte * freedom.weight : 0,
+    byLength: -(ctt * tL + cte * eL),
+    byMass: -(ctt * tM + cte * eM),
+    evidenceByLength: hL,
+    evidenceByMass: hM,
+  };
+}
+
+/** Normalised weights of components, summing to 1. */
+export function normalisedWeights(components: readonly PosteriorNode[]): Float64Array {
+  let highest = Number.NEGATIVE_INFINITY;
+  for (const { logWeight } of components) highest = Math.max(highest, logWeight);
+  const weights = Float64Array.from(components, ({ logWeight }) => Math.exp(logWeight - highest));
+  const total = weights.reduce((sum, w) => sum + w, 0);
+  return weights.map((w) => w / total);
+}

@@ -1,0 +1,106 @@
+/**
+ * How bending stiffness enters a fit: held, fitted under its prior, or integrated over a range that holds all its evidence.
+ */
+import { type FitProblem, stringTension } from './fit-problem.ts';
+import type { EndNode } from './fixity-nodes.ts';
+import { fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace } from './node-fit.ts';
+import type { StiffnessPrior } from './tension-estimate.ts';
+
+/** Where a fit starts, and what happens to ln EI in it. */
+export type StiffnessPlan = { start: { logTension: number; logStiffness: number }; lowestChiSquared: number; spread: number } & (
+  | { kind: 'fixed' }
+  | { kind: 'fitted'; mean: number; weight: number }
+  | { kind: 'integrated'; range: [number, number] }
+);
+
+/** Beyond this posterior standard deviation of ln EI a normal approximation is not trusted. */
+const widestGaussian = 0.2;
+/** Evidence below exp(−10) of the highest is left out. */
+const deepestDrop = 20;
+const gridPoints = 9;
+
+/** Log-density of the prior on ln EI, up to a constant. */
+export function logPrior(prior: StiffnessPrior, logStiffness: number): number {
+  if (prior.kind !== 'value' || prior.relativeUncertainty === 0) return 0;
+  return -0.5 * ((logStiffness - Math.log(prior.value)) / priorSpread(prior)) ** 2;
+}
+
+/** Standard deviation of ln EI under a log-normal prior: the coefficient of variation taken as it is given. */
+function priorSpread(prior: StiffnessPrior & { kind: 'value' }): number {
+  return prior.relativeUncertainty;
+}
+
+/**
+ * Chooses the plan by looking at a few nodes of fixity.
+ *
+ * @param scouts pairs of ends that span what is possible
+ * @returns plan, the lowest χ² seen, and the posterior standard deviation of ln EI at its scout (0 when held)
+ */
+export function planStiffness(
+  problem: FitProblem,
+  scouts: readonly [EndNode, EndNode][],
+  work: NodeWorkspace,
+  correction: ModelCorrection | null,
+): StiffnessPlan {
+  const { prior } = problem;
+  const logTension = Math.log(stringTension(problem.length, problem.massPerLength, problem.peaks));
+  if (prior.kind === 'value' && (prior.relativeUncertainty === 0 || prior.value === 0)) {
+    // A string has no boundary layer; ξ of a million leaves none either, and keeps one model for all.
+    const logStiffness = prior.value === 0 ? logTension + 2 * Math.log(problem.length) - 2 * Math.log(1e6) : Math.log(prior.value);
+    const fits = scouts.map(([a, b]) => fitNode(problem, a, b, { logTension, logStiffness }, { kind: 'fixed' }, work, correction));
+    const best = lowest(fits);
+    return { kind: 'fixed', start: { logTension: best.logTension, logStiffness }, lowestChiSquared: best.chiSquared, spread: 0 };
+  }
+  if (prior.kind === 'value') {
+    const spread = priorSpread(prior);
+    const [mean, weight] = [Math.log(prior.value), 1 / spread ** 2];
+    const fits = scouts.map(([a, b]) =>
+      fitNode(problem, a, b, { logTension, logStiffness: mean }, { kind: 'free', mean, weight }, work, correction),
+    );
+    const best = lowest(fits);
+    const found = { start: best, lowestChiSquared: best.chiSquared, spread: Math.sqrt(best.varianceStiffness) };
+    if (fits.every((fit) => fit.converged && Math.sqrt(fit.varianceStiffness) <= widestGaussian))
+      return { kind: 'fitted', mean, weight, ...found };
+    return locateRange(problem, scouts, [mean - 4.5 * spread, mean + 4.5 * spread], logTension, work, correction);
+  }
+  return locateRange(problem, scouts, [Math.log(prior.bounds[0]), Math.log(prior.bounds[1])], logTension, work, correction);
+}
+
+function lowest(fits: readonly NodeFit[]): NodeFit {
+  return fits.reduce((best, fit) => (fit.objective < best.objective ? fit : best));
+}
+
+/** Narrows a range of ln EI to where there is evidence, by grids that shrink while most of a grid is empty. */
+function locateRange(
+  problem: FitProblem,
+  scouts: readonly [EndNode, EndNode][],
+  whole: [number, number],
+  logTension: number,
+  work: NodeWorkspace,
+  correction: ModelCorrection | null,
+): StiffnessPlan {
+  let range = whole;
+  let best = { objective: Number.POSITIVE_INFINITY, chiSquared: 0, logTension, logStiffness: range[0] };
+  for (let round = 0; round < 6; round++) {
+    const step = (range[1] - range[0]) / (gridPoints - 1);
+    const objectives = new Float64Array(gridPoints).fill(Number.POSITIVE_INFINITY);
+    for (const [first, second] of scouts) {
+      let start = best.logTension;
+      for (let i = 0; i < gridPoints; i++) {
+        const logStiffness = range[0] + i * step;
+        const fit = fitNode(problem, first, second, { logTension: start, logStiffness }, { kind: 'fixed' }, work, correction);
+        const objective = fit.chiSquared - 2 * logPrior(problem.prior, logStiffness);
+        objectives[i] = Math.min(objectives[i]!, objective);
+        if (objective < best.objective) best = { objective, chiSquared: fit.chiSquared, logTension: fit.logTension, logStiffness };
+        start = fit.logTension + fit.valley * step;
+      }
+    }
+    const held = [...objectives.keys()].filter((i) => objectives[i]! < best.objective + deepestDrop);
+    const [from, to] = [Math.max(0, (held[0] ?? 0) - 1), Math.min(gridPoints - 1, (held.at(-1) ?? gridPoints - 1) + 1)];
+    const narrowed: [number, number] = [range[0] + from * step, range[0] + to * step];
+    const enough = to - from >= 6;
+    range = narrowed;
+    if (enough) break;
+  }
+  return { kind: 'integrated', range, start: best, lowestChiSquared: best.chiSquared, spread: (range[1] - range[0]) / 6 };
+}
