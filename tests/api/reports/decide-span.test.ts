@@ -14,8 +14,7 @@ const reference: FrozenReference = {
 };
 function decide(over: Partial<SpanToDecide>, interval95: [number, number] = [0.98e6, 1.02e6], tension = 1e6) {
   return decideSpan({
-    estimate: { tension, interval95 },
-    boundsOnly: null,
+    estimate: { tension, interval95, boundsOnly: null },
     notMeasuredReason: null,
     reference,
     stage: 'in service ',
@@ -63,7 +62,11 @@ test('does not compare across construction stages', () => {
 });
 
 test('gives bounds only where the estimate is too wide for a verdict', () => {
-  expect(decide({ boundsOnly: 'Too wide.' })).toMatchObject({ zone: 'bounds-only', reason: 'Too wide.', toReference: null });
+  expect(decide({ estimate: { tension: 1e6, interval95: [0.8e6, 1.2e6], boundsOnly: 'Too wide.' } })).toMatchObject({
+    zone: 'bounds-only',
+    reason: 'Too wide.',
+    toReference: null,
+  });
 });
 
 test('says why a cable was not measured', () => {

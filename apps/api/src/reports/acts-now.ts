@@ -34,7 +34,7 @@ export function whyNot(act: RevisionAct, situation: RevisionSituation): string |
   return reasons[act](situation);
 }
 
-const authorOnly = 'Only the author or the deputy named by the author can do this.';
+export const authorOnly = 'Only the author or the deputy named by the author can do this.';
 const reasons: Record<RevisionAct, (situation: RevisionSituation) => string | null> = {
   edit: ({ state }) => (isOpen(state) ? null : notWhile(state, 'its texts are frozen')),
   submit: (situation) => {
@@ -60,7 +60,7 @@ const reasons: Record<RevisionAct, (situation: RevisionSituation) => string | nu
     return pdfReady ? null : 'The PDF is being rendered. It is ready in a few seconds.';
   },
   withdraw: ({ state, isAuthorOrDeputy }) => {
-    if (state !== 'issued') return notWhile(state, 'there is nothing to withdraw');
+    if (state !== 'issued' && state !== 'superseded') return notWhile(state, 'there is nothing to withdraw');
     return isAuthorOrDeputy ? null : authorOnly;
   },
   'start-next-revision': ({ state, isLatest }) => {

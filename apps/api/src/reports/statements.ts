@@ -1,9 +1,15 @@
+import type { ReportContent } from '@strandnote/core/report-content';
+
 /** The words that a signature stands for. They are shown before signing and stored with the signature as they were. */
 export interface SignedRevision {
   number: string;
   letter: string;
   clientName: string;
   firmName: string;
+}
+
+export function signedRevisionOf({ report, client, firm }: ReportContent): SignedRevision {
+  return { number: report.number, letter: report.letter, clientName: client.name, firmName: firm.name };
 }
 
 export function preparedStatement({ number, letter }: SignedRevision): string {
