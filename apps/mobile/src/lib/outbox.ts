@@ -10,7 +10,7 @@ import {
   type OutboxState,
   reduceOutbox,
 } from './outbox-state.ts';
-import { queryClient } from './query-client.ts';
+import { meKey, queryClient } from './query-client.ts';
 
 const storageKey = 'strandnote.outbox';
 /** One tab sends at a time: two would send everything twice. */
@@ -36,12 +36,14 @@ export function subscribeToOutbox(listener: () => void): () => void {
 
 /** Reads what an earlier run left behind and goes on sending whenever there is hope. Call once, when the app starts. */
 export async function openOutbox(): Promise<void> {
+  // Another tab's news is shown here, not acted on: two tabs that answer each other would never come to rest.
   otherTabs.onmessage = () => reread();
   addEventListener('online', () => flushOutbox());
   document.addEventListener('visibilitychange', () => {
     if (document.visibilityState === 'visible') flushOutbox();
   });
   await reread();
+  flushOutbox();
 }
 
 /** Resolves once the entry is safe on this device. Sending follows by itself. */
@@ -71,7 +73,7 @@ export function sendAs(userId: string | null): void {
 /** Sends what waits, in order, unless that is under way already. */
 export function flushOutbox(): void {
   clearTimeout(timer);
-  if (sending || sender === null) return;
+  if (sending || !hasWork()) return;
   sending = true;
   navigator.locks
     .request(lockName, { ifAvailable: true }, async (lock) => {
@@ -86,7 +88,7 @@ export function flushOutbox(): void {
 
 async function sendRound(): Promise<void> {
   // The lock is ours: whoever was sending is gone.
-  await dispatch({ type: 'appRestarted' });
+  if (state.entries.some((entry) => entry.state === 'sending')) await dispatch({ type: 'appRestarted' });
   const tried = new Set<string>();
   for (;;) {
     const entry = sender === null ? null : nextEntry(state, sender, tried);
@@ -122,11 +124,8 @@ async function noteFailure(id: string, error: unknown): Promise<boolean> {
   }
   failures += 1;
   await dispatch({ type: 'sendingFailed', id });
-  if (problem?.kind === 'signed-out') {
-    sender = null;
-    await queryClient.invalidateQueries({ queryKey: ['me'] });
-    return false;
-  }
+  // Whoever shows who is signed in finds out, and `sendAs` follows.
+  if (problem?.kind === 'signed-out') await queryClient.invalidateQueries({ queryKey: meKey });
   // An error of the server may be about this entry alone: the others are tried all the same.
   return problem?.kind === 'failed';
 }
@@ -140,9 +139,13 @@ function versionOf(reply: unknown): number | null {
   return typeof reply.version === 'number' ? reply.version : null;
 }
 
+/** Whether the person signed in has something here that may still be sent. */
+function hasWork(): boolean {
+  return sender !== null && state.entries.some((entry) => entry.userId === sender && entry.state !== 'refused');
+}
+
 function planRetry(): void {
-  const waiting = sender !== null && state.entries.some((entry) => entry.userId === sender && entry.state !== 'refused');
-  if (waiting) timer = setTimeout(flushOutbox, retryAfter[Math.min(failures, retryAfter.length - 1)]);
+  if (hasWork()) timer = setTimeout(flushOutbox, retryAfter[Math.min(failures, retryAfter.length - 1)]);
 }
 
 /** The stored queue is the truth and changes in one transaction, whichever tab changes it. */
@@ -158,7 +161,6 @@ async function dispatch(action: OutboxAction): Promise<void> {
 
 async function reread(): Promise<void> {
   publish((await get<OutboxState>(storageKey)) ?? emptyOutbox);
-  flushOutbox();
 }
 
 function publish(next: OutboxState): void {
