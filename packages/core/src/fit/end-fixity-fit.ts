@@ -15,7 +15,7 @@
  */
 import type { FitProblem } from './fit-problem.ts';
 import { type FixityNode, gaussLegendre } from './fixity-nodes.ts';
-import { evaluateModel, fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace, type StiffnessFreedom } from './node-fit.ts';
+import { fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace, type StiffnessFreedom } from './node-fit.ts';
 import { logPrior, type StiffnessPlan } from './stiffness-plan.ts';
 
 /** One component of the posterior. */
@@ -28,15 +28,16 @@ export interface PosteriorNode {
   /** Parts of the variance of t within the node: from frequencies, from the prior on EI. */
   frequencyVariance: number;
   priorVariance: number;
-  /** ∂t/∂ln L and ∂t/∂ln m within the node, and slopes of the log-evidence by both. */
-  byLength: number;
-  byMass: number;
-  evidenceByLength: number;
-  evidenceByMass: number;
+  length: InputSlope;
+  mass: InputSlope;
+  axialStiffness: InputSlope;
 }
 
-/** Nodes of ln EI that a range is covered with. */
-const stiffnessNodes = 12;
+/** How a node answers to the logarithm of an input: ∂t within it, and the slope of its log-evidence. */
+export interface InputSlope {
+  within: number;
+  evidence: number;
+}
 
 /**
  * Fits every node.
@@ -63,7 +64,7 @@ export function fitFixity(
     else {
       const freedom: StiffnessFreedom = plan.kind === 'fixed' ? { kind: 'fixed' } : { kind: 'free', mean: plan.mean, weight: plan.weight };
       const fit = fitNode(problem, node.first, node.second, start, freedom, work, correction);
-      components.push(component(problem, node, group, fit, freedom, Math.log(node.prior), work, correction));
+      components.push(component(problem, node, group, fit, freedom, Math.log(node.prior), work));
     }
     const begun = components[first]!.fit;
     start = { logTension: begun.logTension, logStiffness: begun.logStiffness };
@@ -82,14 +83,14 @@ function integrateStiffness(
   components: PosteriorNode[],
 ): void {
   const [low, high] = plan.range;
-  const rule = gaussLegendre(stiffnessNodes);
+  const rule = gaussLegendre(plan.nodes);
   let previous = start;
   rule.nodes.forEach((u, i) => {
     const logStiffness = low + (high - low) * u;
     const from = { logTension: previous.logTension, logStiffness };
     const fit = fitNode(problem, node.first, node.second, from, { kind: 'fixed' }, work, correction);
     const share = Math.log(node.prior * rule.weights[i]!) + logPrior(problem.prior, logStiffness);
-    components.push(component(problem, node, group, fit, { kind: 'fixed' }, share, work, correction));
+    components.push(component(problem, node, group, fit, { kind: 'fixed' }, share, work));
     const ahead = rule.nodes[i + 1];
     // Along the valley of best tension the next node starts almost at its answer.
     previous = {
@@ -99,7 +100,7 @@ function integrateStiffness(
   });
 }
 
-/** Weight and sensitivities of one fitted node. */
+/** Weight and sensitivities of one fitted node, from what its last evaluation left in the workspace. */
 function component(
   problem: FitProblem,
   node: FixityNode,
@@ -108,20 +109,12 @@ function component(
   freedom: StiffnessFreedom,
   logShare: number,
   work: NodeWorkspace,
-  correction: ModelCorrection | null,
 ): PosteriorNode {
-  evaluateModel(problem, node.first, node.second, fit.logTension, fit.logStiffness, work, correction);
   const { weights } = problem;
   const free = freedom.kind === 'free';
-  let [tL, eL, tM, eM, hL, hM, tt, te, ee] = [0, 0, 0, 0, 0, 0, 0, 0, 0];
+  let [tt, te, ee] = [0, 0, 0];
   for (let i = 0; i < weights.length; i++) {
-    const [w, jt, je, jl, r] = [weights[i]!, work.byTension[i]!, work.byStiffness[i]!, work.byLength[i]!, work.residuals[i]!];
-    tL += w * jt * jl;
-    eL += w * je * jl;
-    tM -= 0.5 * w * jt;
-    eM -= 0.5 * w * je;
-    hL += w * r * jl;
-    hM -= 0.5 * w * r;
+    const [w, jt, je] = [weights[i]!, work.byTension[i]!, work.byStiffness[i]!];
     tt += w * jt * jt;
     te += w * jt * je;
     ee += w * je * je;
@@ -135,11 +128,22 @@ function component(
     fit,
     frequencyVariance: free ? ctt * ctt * tt + 2 * ctt * cte * te + cte * cte * ee : ctt,
     priorVariance: free ? cte * cte * freedom.weight : 0,
-    byLength: -(ctt * tL + cte * eL),
-    byMass: -(ctt * tM + cte * eM),
-    evidenceByLength: hL,
-    evidenceByMass: hM,
+    length: inputSlope(work.byLength, weights, work, ctt, cte),
+    mass: inputSlope(work.byMass, weights, work, ctt, cte),
+    axialStiffness: inputSlope(work.byAxialStiffness, weights, work, ctt, cte),
   };
+}
+
+/** −[C Jᵀ W ∂ln f/∂p]_t and Σ W r ∂ln f/∂p. */
+function inputSlope(byInput: Float64Array, weights: Float64Array, work: NodeWorkspace, ctt: number, cte: number): InputSlope {
+  let [t, e, evidence] = [0, 0, 0];
+  for (let i = 0; i < weights.length; i++) {
+    const weighted = weights[i]! * byInput[i]!;
+    t += weighted * work.byTension[i]!;
+    e += weighted * work.byStiffness[i]!;
+    evidence += weighted * work.residuals[i]!;
+  }
+  return { within: -(ctt * t + cte * e), evidence };
 }
 
 /** Normalised weights of components, summing to 1. */

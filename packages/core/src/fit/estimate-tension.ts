@@ -12,6 +12,7 @@ import { fitFixity, normalisedWeights } from './end-fixity-fit.ts';
 import { buildProblem, type FitProblem } from './fit-problem.ts';
 import { type EndNode, type FixityNode, fixityNodes, fixityRange, isKnownEnd } from './fixity-nodes.ts';
 import { type SettledNoise, settleNoise, stiffnessIsFitted } from './frequency-noise.ts';
+import { modelCorrection } from './model-correction.ts';
 import { type BracketFit, modelResiduals, modelTable } from './model-table.ts';
 import { type ModelCorrection, type NodeWorkspace, nodeWorkspace } from './node-fit.ts';
 import { assemblePosterior, inputUncertainty, type LengthShift, type Posterior } from './posterior.ts';
@@ -33,10 +34,17 @@ export function estimateTension(cable: Cable, peaks: readonly ModalPeak[], optio
   checkPeaks(peaks);
   checkOptions(options);
   const work = nodeWorkspace(peaks.length);
-  const correction: ModelCorrection | null = null;
-  const settled = settleNoise(buildProblem(cable, peaks, options), scoutEnds(cable), work, correction);
+  const problem = buildProblem(cable, peaks, options);
+  const correction = modelCorrection(problem);
+  const settled = settleNoise(problem, scoutEnds(cable), work, correction);
   const shifts = lengthShifts(cable, options);
-  const components = fitFixity(settled.problem, fixityNodes(settled.problem.ends, isSharp(settled)), settled.plan, work, correction);
+  const components = fitFixity(
+    settled.problem,
+    fixityNodes(settled.problem.ends, isSharp(settled), isSymmetric(cable)),
+    settled.plan,
+    work,
+    correction,
+  );
   const posterior = assemblePosterior(settled.problem, components, shifts);
   if (!Number.isFinite(posterior.logTension) || !Number.isFinite(posterior.variance)) {
     throw new EstimationError('not-converged', 'peaks', 'No tension fits these frequencies on this cable.');
@@ -75,6 +83,11 @@ function scoutEnds(cable: Cable): [EndNode, EndNode][] {
 function isSharp({ problem, plan }: SettledNoise): boolean {
   const xi = problem.length * Math.exp((plan.start.logTension - plan.start.logStiffness) / 2);
   return xi < 30 && problem.uncertainties.some((u) => u < 0.001);
+}
+
+/** Whether exchanging the ends changes no frequency: what sits on the cable sits in its middle, or nothing does. */
+function isSymmetric({ attachments, length }: Cable): boolean {
+  return (attachments ?? []).every(({ kind, position }) => kind === 'damper' || Math.abs(position - length / 2) < 1e-9 * length);
 }
 
 /** Dampers of unknown effect shorten the cable by at most their distance from the end; embedded ends lengthen it. */

@@ -15,11 +15,14 @@ import type { EndNode } from './fixity-nodes.ts';
 
 /** What exact sag and attachments add to ln f of the bare cable, with derivatives; see ./model-correction. */
 export interface ModelCorrection {
-  /** Fills `shift`, `byTension` and `byStiffness` for every peak at this state. */
-  evaluate(tension: number, stiffness: number, first: EndNode, second: EndNode): void;
+  /** Fills `shift`, `byTension` and `byStiffness` for every peak at t = ln T, e = ln EI. */
+  evaluate(t: number, e: number, first: EndNode, second: EndNode): void;
   shift: Float64Array;
   byTension: Float64Array;
   byStiffness: Float64Array;
+  byLength: Float64Array;
+  byMass: Float64Array;
+  byAxialStiffness: Float64Array;
 }
 
 /** How ln EI is treated in a node. */
@@ -34,6 +37,10 @@ export interface NodeWorkspace {
   byTension: Float64Array;
   byStiffness: Float64Array;
   byLength: Float64Array;
+  byMass: Float64Array;
+  byAxialStiffness: Float64Array;
+  /** Last wavenumber of every peak: the next node begins there. */
+  wavenumbers: Float64Array;
 }
 
 /** The fit at a node. Covariances are those of (t, e) given the node. */
@@ -62,6 +69,9 @@ export function nodeWorkspace(count: number): NodeWorkspace {
     byTension: row(),
     byStiffness: row(),
     byLength: row(),
+    byMass: row(),
+    byAxialStiffness: row(),
+    wavenumbers: row(),
   };
 }
 
@@ -103,7 +113,8 @@ export function fitNode(
     [t, e] = [t + stepT, e + stepE];
     accepted = here;
     [stepT, stepE] = [clampStep(here.stepT, 1), clampStep(here.stepE, 1.5)];
-    if (Math.abs(stepT) < 1e-9 && Math.abs(stepE) < 1e-7) {
+    // Convergence is nearly quadratic: after a step this small what is left is below a hundred-millionth.
+    if (Math.abs(stepT) < 3e-6 && Math.abs(stepE) < 3e-5) {
       converged = true;
       break;
     }
@@ -193,14 +204,15 @@ export function evaluateModel(
 ): void {
   const { length, modes, logFrequencies } = problem;
   const xi = length * Math.exp((t - e) / 2);
-  setEnd(work.first, first, length, e, xi);
-  setEnd(work.second, second, length, e, xi);
+  setEndForm(work.first, first, length, e, xi);
+  setEndForm(work.second, second, length, e, xi);
   const constant = (e - Math.log(problem.massPerLength)) / 2 - Math.log(2 * Math.PI * length * length);
   const { solution } = work;
-  correction?.evaluate(Math.exp(t), Math.exp(e), first, second);
+  correction?.evaluate(t, e, first, second);
   for (let i = 0; i < modes.length; i++) {
-    solveWavenumber(modes[i]!, xi, work.first, work.second, solution);
+    solveWavenumber(modes[i]!, xi, work.first, work.second, solution, work.wavenumbers[i]!);
     const x = solution[0]!;
+    work.wavenumbers[i] = x;
     const square = x * x + xi * xi;
     const byXi = solution[1]! * xi;
     const [first1, second1] = [solution[2]! * work.first.b, solution[3]! * work.second.b];
@@ -213,8 +225,13 @@ export function evaluateModel(
     work.byTension[i] = xt / x + (x * xt + (xi * xi) / 2) / square;
     work.byStiffness[i] = 0.5 + xe / x + (x * xe - (xi * xi) / 2) / square;
     work.byLength[i] = -2 + xl / x + (x * xl + xi * xi) / square;
+    work.byMass[i] = -0.5;
+    work.byAxialStiffness[i] = 0;
     if (correction) {
       model += correction.shift[i]!;
+      work.byLength[i]! += correction.byLength[i]!;
+      work.byMass[i]! += correction.byMass[i]!;
+      work.byAxialStiffness[i] = correction.byAxialStiffness[i]!;
       work.byTension[i]! += correction.byTension[i]!;
       work.byStiffness[i]! += correction.byStiffness[i]!;
     }
@@ -222,7 +239,8 @@ export function evaluateModel(
   }
 }
 
-function setEnd(form: EndForm, end: EndNode, length: number, e: number, xi: number): void {
+/** Writes an end node in the form of the models, at e = ln EI and ξ. */
+export function setEndForm(form: EndForm, end: EndNode, length: number, e: number, xi: number): void {
   if (end.stiffness !== null) {
     form.a = 1;
     form.b = (end.stiffness * length) / Math.exp(e);

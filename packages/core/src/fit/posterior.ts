@@ -61,14 +61,8 @@ export function inputUncertainty(given: CableUncertainty | undefined): { length:
  * @param problem the settled problem
  * @param components fitted nodes
  * @param shifts of the length that are not known
- * @param byAxialStiffness ∂ln T/∂ln EA, 0 without sag
  */
-export function assemblePosterior(
-  problem: FitProblem,
-  components: readonly PosteriorNode[],
-  shifts: readonly LengthShift[],
-  byAxialStiffness = 0,
-): Posterior {
+export function assemblePosterior(problem: FitProblem, components: readonly PosteriorNode[], shifts: readonly LengthShift[]): Posterior {
   const weights = normalisedWeights(components);
   const means = Float64Array.from(components, ({ fit }) => fit.logTension);
   const within = Float64Array.from(components, ({ fit }) => fit.varianceTension);
@@ -79,9 +73,9 @@ export function assemblePosterior(
     return average((c) => (c.fit.logTension - centre) * (value(c) - mean));
   };
   const sensitivities: Sensitivities = {
-    length: average((c) => c.byLength) + along((c) => c.evidenceByLength),
-    mass: average((c) => c.byMass) + along((c) => c.evidenceByMass),
-    axialStiffness: byAxialStiffness,
+    length: average((c) => c.length.within) + along((c) => c.length.evidence),
+    mass: average((c) => c.mass.within) + along((c) => c.mass.evidence),
+    axialStiffness: average((c) => c.axialStiffness.within) + along((c) => c.axialStiffness.evidence),
   };
   const u = inputUncertainty(problem.cable.relativeUncertainty);
   const inputs = {

@@ -10,14 +10,15 @@ import type { StiffnessPrior } from './tension-estimate.ts';
 export type StiffnessPlan = { start: { logTension: number; logStiffness: number }; lowestChiSquared: number; spread: number } & (
   | { kind: 'fixed' }
   | { kind: 'fitted'; mean: number; weight: number }
-  | { kind: 'integrated'; range: [number, number] }
+  /** Quadrature over a range of ln EI with so many nodes. */
+  | { kind: 'integrated'; range: [number, number]; nodes: number }
 );
 
 /** Beyond this posterior standard deviation of ln EI a normal approximation is not trusted. */
 const widestGaussian = 0.2;
 /** Evidence below exp(−10) of the highest is left out. */
 const deepestDrop = 20;
-const gridPoints = 9;
+const gridPoints = 7;
 
 /** Log-density of the prior on ln EI, up to a constant. */
 export function logPrior(prior: StiffnessPrior, logStiffness: number): number {
@@ -80,6 +81,7 @@ function locateRange(
   correction: ModelCorrection | null,
 ): StiffnessPlan {
   let range = whole;
+  let relief = 0;
   let best = { objective: Number.POSITIVE_INFINITY, chiSquared: 0, logTension, logStiffness: range[0] };
   for (let round = 0; round < 6; round++) {
     const step = (range[1] - range[0]) / (gridPoints - 1);
@@ -98,9 +100,12 @@ function locateRange(
     const held = [...objectives.keys()].filter((i) => objectives[i]! < best.objective + deepestDrop);
     const [from, to] = [Math.max(0, (held[0] ?? 0) - 1), Math.min(gridPoints - 1, (held.at(-1) ?? gridPoints - 1) + 1)];
     const narrowed: [number, number] = [range[0] + from * step, range[0] + to * step];
-    const enough = to - from >= 6;
+    const enough = to - from >= 4;
     range = narrowed;
+    relief = Math.max(...objectives.slice(from, to + 1)) - best.objective;
     if (enough) break;
   }
-  return { kind: 'integrated', range, start: best, lowestChiSquared: best.chiSquared, spread: (range[1] - range[0]) / 6 };
+  // Flat evidence needs few nodes; a sharp summit within a wide range needs many.
+  const nodes = relief < 3 ? 5 : relief < 12 ? 8 : 12;
+  return { kind: 'integrated', range, nodes, start: best, lowestChiSquared: best.chiSquared, spread: (range[1] - range[0]) / 6 };
 }

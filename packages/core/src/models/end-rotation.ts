@@ -37,19 +37,30 @@ const iterationLimit = 60;
 /**
  * Dimensionless wavenumber x = βL of one mode, and its derivatives.
  *
- * Newton on x − nπ − φ_1 − φ_2 − δ, the slope of δ neglected: the phase falls or rises more slowly than x itself, so that
- * it converges from x = nπ; iterations are bounded.
- *
  * @param mode n >= 1
  * @param xi ξ >= 0
- * @param first, second the ends
+ * @param first one end
+ * @param second the other
  * @param out receives x and its derivatives
+ * @param start x to begin with; nπ unless given
  * @returns whether it converged
  */
-export function solveWavenumber(mode: number, xi: number, first: EndForm, second: EndForm, out: WavenumberSolution): boolean {
+export function solveWavenumber(mode: number, xi: number, first: EndForm, second: EndForm, out: WavenumberSolution, start = 0): boolean {
+  const x = wavenumber(mode, xi, first, second, start);
+  out[0] = Math.abs(x);
+  writeDerivatives(mode, out[0]!, xi, first, second, out);
+  return x > 0;
+}
+
+/**
+ * x = βL of one mode alone; negative if the iteration did not settle.
+ *
+ * Newton on x − nπ − φ_1 − φ_2 − δ, the slope of δ neglected: the phase falls or rises more slowly than x itself, so that
+ * it converges from x = nπ; iterations are bounded.
+ */
+export function wavenumber(mode: number, xi: number, first: EndForm, second: EndForm, start = 0): number {
   const base = mode * Math.PI;
-  let x = base;
-  let converged = false;
+  let x = start > 0 ? start : base;
   for (let i = 0; i < iterationLimit; i++) {
     const y = Math.sqrt(x * x + xi * xi);
     const delta = y < deepestCoupling ? endCoupling(mode, x, xi, first, second) : 0;
@@ -57,19 +68,11 @@ export function solveWavenumber(mode: number, xi: number, first: EndForm, second
     const step = residual / (1 - phaseByX(x, y, xi, first) - phaseByX(x, y, xi, second));
     // The first mode of a soft beam may overshoot; x never falls below a tenth of nπ.
     x = Math.max(x - step, 0.1 * base);
-    if (Math.abs(step) < 2e-15 * x) {
-      converged = true;
-      break;
-    }
-    // The last digits may dither between two neighbours.
-    if (i > 12 && Math.abs(step) < 1e-13 * x) {
-      converged = true;
-      break;
-    }
+    // The step after next would be lost in rounding: convergence is quadratic but for δ. The last digits may dither.
+    const size = Math.abs(step);
+    if (size < 2e-15 * x || (delta === 0 && size < 1e-9 * x) || (i > 12 && size < 1e-13 * x)) return x;
   }
-  out[0] = x;
-  writeDerivatives(mode, x, xi, first, second, out);
-  return converged;
+  return -x;
 }
 
 function writeDerivatives(mode: number, x: number, xi: number, first: EndForm, second: EndForm, out: WavenumberSolution): void {

@@ -3,7 +3,9 @@
  */
 import { type Cable, checkCable, type EndCondition } from '../cable/cable.ts';
 import { assertRange, EstimationError } from '../errors.ts';
-import { type EndForm, endOfFixity, endOfStiffness, frequencyOfWavenumber, solveWavenumber } from './end-rotation.ts';
+import { attachedFrequencies, type LumpedAttachment, lumpedAttachments } from './attachments.ts';
+import { type EndForm, endOfFixity, endOfStiffness, frequencyOfWavenumber, wavenumber } from './end-rotation.ts';
+import { sagProperties, sagStiffnessOf, sagWavenumbers } from './sag.ts';
 import { stiffStringFrequencies } from './stiff-string.ts';
 import { modeNumbers, tautStringFrequencies } from './taut-string.ts';
 
@@ -14,6 +16,8 @@ export interface CableState {
   bendingStiffness?: number;
   /** Default in-plane; sag acts there when axial stiffness and inclination are given. */
   plane?: 'in-plane' | 'out-of-plane';
+  /** Acceleration of free fall, m/s², for the sag. Default 9.80665. */
+  gravity?: number;
 }
 
 /**
@@ -28,30 +32,66 @@ export interface CableState {
  */
 export function naturalFrequencies(cable: Cable, state: CableState, modeCount: number): number[] {
   checkCable(cable);
-  const modes = modeNumbers(modeCount);
+  modeNumbers(modeCount);
   const bendingStiffness = state.bendingStiffness ?? cable.bendingStiffness ?? 0;
   assertRange(bendingStiffness, 'bendingStiffness', 0, 1e15);
   assertRange(state.tension, 'tension', 0, 1e15, bendingStiffness === 0);
+  const sagStiffness = sagOf(cable, state);
+  const lumps = lumpedOf(cable);
+  const { tension } = state;
+  if (bendingStiffness === 0 && lumps.length === 0 && sagStiffness === 0) return tautStringFrequencies(cable, tension, modeCount);
   const ends = cable.ends ?? ['unknown', 'unknown'];
-  if (bendingStiffness === 0) return tautStringFrequencies(cable, state.tension, modeCount);
-  if (ends[0] === 'hinged' && ends[1] === 'hinged') {
-    return stiffStringFrequencies(cable, { tension: state.tension, bendingStiffness }, modeCount);
-  }
-  const xi = cable.length * Math.sqrt(state.tension / bendingStiffness);
+  const xi = bendingStiffness === 0 ? Number.POSITIVE_INFINITY : cable.length * Math.sqrt(tension / bendingStiffness);
   const first = knownEnd(ends[0], 'ends[0]', cable.length, bendingStiffness, xi);
   const second = knownEnd(ends[1], 'ends[1]', cable.length, bendingStiffness, xi);
-  const solution = new Float64Array(4);
-  return modes.map((mode) => {
-    if (!solveWavenumber(mode, xi, first, second, solution)) {
-      throw new EstimationError('not-converged', 'ends', `The frequency of mode ${mode} could not be found.`);
-    }
-    return frequencyOfWavenumber(solution[0]!, cable, { tension: state.tension, bendingStiffness });
-  });
+  if (lumps.length > 0 || bendingStiffness === 0) {
+    const { length, massPerLength } = cable;
+    const attached = { length, massPerLength, tension, bendingStiffness, first, second, attachments: lumps, sagStiffness };
+    return attachedFrequencies(attached, modeCount).map((omega) => omega / (2 * Math.PI));
+  }
+  if (sagStiffness === 0 && first.b === 0 && second.b === 0) return stiffStringFrequencies(cable, { tension, bendingStiffness }, modeCount);
+  const base = bareWavenumbers(modeCount + 2, xi, first, second);
+  const wanted = base.slice(0, modeCount);
+  if (sagStiffness > 0) {
+    const lambdaSquared = (sagStiffness * cable.length ** 3) / tension;
+    sagWavenumbers(base, xi, lambdaSquared, first, second, modeCount, wanted);
+  }
+  return Array.from(wanted, (x) => frequencyOfWavenumber(x, cable, { tension, bendingStiffness }));
+}
+
+function bareWavenumbers(count: number, xi: number, first: EndForm, second: EndForm): Float64Array {
+  const base = new Float64Array(count);
+  for (let n = 1; n <= count; n++) {
+    const x = wavenumber(n, xi, first, second);
+    if (!(x > 0)) throw new EstimationError('not-converged', 'ends', `The frequency of mode ${n} could not be found.`);
+    base[n - 1] = x;
+  }
+  return base;
+}
+
+/** κ² EA/L_e (N/m³) in the plane of the sag, else 0. */
+function sagOf(cable: Cable, { tension, plane, gravity }: CableState): number {
+  const sag = sagProperties(cable, gravity);
+  return sag === null || plane === 'out-of-plane' || tension === 0 ? 0 : sagStiffnessOf(sag, cable.length, tension);
+}
+
+/** Masses and supports; a damper without a coefficient has no one frequency. */
+function lumpedOf(cable: Cable): LumpedAttachment[] {
+  const unknown = (cable.attachments ?? []).findIndex(({ kind }) => kind === 'damper');
+  if (unknown >= 0) {
+    throw new EstimationError(
+      'attachment-unknown',
+      `attachments[${unknown}]`,
+      'With a damper use dampedFrequencies; one of unknown effect only bounds the frequencies.',
+    );
+  }
+  return lumpedAttachments(cable);
 }
 
 /** An end in the form of the models; refuses one that is not known. */
 export function knownEnd(end: EndCondition, field: string, length: number, bendingStiffness: number, xi: number): EndForm {
-  if (end === 'hinged') return { a: 1, b: 0 };
+  // A string cannot be held against rotation.
+  if (bendingStiffness === 0 || end === 'hinged') return { a: 1, b: 0 };
   if (end === 'clamped') return { a: 0, b: 1 };
   if (end !== 'unknown' && 'rotationalStiffness' in end) return endOfStiffness(end.rotationalStiffness, length, bendingStiffness);
   if (end !== 'unknown' && end.fixity[0] === end.fixity[1]) return endOfFixity(end.fixity[0], xi);
