@@ -1,0 +1,3 @@
+import type PDFDocument from 'pdfkit';
+
+export type PdfDocument = InstanceType<typeof PDFDocument>;
