@@ -29,7 +29,7 @@ async function selectIssued(tx: Tx, where?: SQL): Promise<IssuedReport[]> {
     .innerJoin(submissions, eq(submissions.id, revisions.approvedSubmissionId))
     .innerJoin(files, eq(files.id, revisions.signedFileId))
     .where(and(inArray(revisions.state, ['issued', 'superseded', 'withdrawn']), where))
-    .orderBy(desc(revisions.issuedAt));
+    .orderBy(desc(revisions.issuedAt), desc(revisions.createdAt));
   return rows.map(({ revision, report, file, ...names }) => ({
     revisionId: revision.id,
     reportNumber: report.number,

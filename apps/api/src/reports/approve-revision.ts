@@ -13,7 +13,7 @@ import { approvedMail } from './revision-mail.ts';
 import { assertNow } from './revision-situation.ts';
 import { signSubmission } from './sign-submission.ts';
 import { checkedStatement, signedRevisionOf } from './statements.ts';
-import { contentOf, latestSubmission } from './submissions.queries.ts';
+import { contentOf, latestSubmission, loadSubmission } from './submissions.queries.ts';
 
 /**
  * A checker approves a revision in check and signs for the hash that they looked at. Nobody approves what they prepared,
@@ -25,7 +25,7 @@ export async function approveRevision(deps: AppDeps, actor: Actor, revisionId: s
   await withFirm(deps.db, actor, async (tx) => {
     const loaded = await lockRevision(tx, revisionId);
     await assertNow(tx, actor, loaded, 'approve');
-    const submission = (await latestSubmission(tx, revisionId))!;
+    const submission = (await loadSubmission(tx, (await latestSubmission(tx, revisionId))!.id))!;
     if (submission.contentSha256 !== body.contentSha256) {
       throw new AppError('stale-content', 'This is not the content that is in check now. Look at it again, then sign.');
     }

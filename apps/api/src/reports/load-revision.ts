@@ -1,8 +1,8 @@
 import { type Actor, schema, type Tx } from '@strandnote/db';
-import { eq } from 'drizzle-orm';
+import { and, eq } from 'drizzle-orm';
 import { AppError } from '../http/errors.ts';
 
-const { reports, revisions } = schema;
+const { reports, revisionCables, revisions } = schema;
 
 export type RevisionRow = typeof revisions.$inferSelect;
 export type ReportRow = typeof reports.$inferSelect;
@@ -29,6 +29,15 @@ export async function loadRevision(tx: Tx, revisionId: string): Promise<LoadedRe
 export async function lockRevision(tx: Tx, revisionId: string): Promise<LoadedRevision> {
   await tx.select({ id: revisions.id }).from(revisions).where(eq(revisions.id, revisionId)).for('no key update');
   return loadRevision(tx, revisionId);
+}
+
+/** The cables that a revision covers are those it was started with: they are those of each of its submissions. */
+export async function coversCable(tx: Tx, revisionId: string, cableId: string): Promise<boolean> {
+  const [covered] = await tx
+    .select({ id: revisionCables.id })
+    .from(revisionCables)
+    .where(and(eq(revisionCables.revisionId, revisionId), eq(revisionCables.cableId, cableId)));
+  return covered !== undefined;
 }
 
 export function isAuthorOrDeputy(revision: RevisionRow, actor: Actor): boolean {

@@ -5,9 +5,9 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
-import { lockRevision } from './load-revision.ts';
+import { coversCable, lockRevision } from './load-revision.ts';
 import { assertNow } from './revision-situation.ts';
-import { contentOf, latestSubmission } from './submissions.queries.ts';
+import { latestSubmission } from './submissions.queries.ts';
 
 const { checkComments } = schema;
 
@@ -19,7 +19,7 @@ export async function remark(deps: AppDeps, actor: Actor, revisionId: string, bo
     if (await isRepeated(tx, revisionId, body)) return;
     await assertNow(tx, actor, loaded, 'remark');
     const submission = (await latestSubmission(tx, revisionId))!;
-    if (body.cableId !== null && !contentOf(submission).cables.some(({ id }) => id === body.cableId)) {
+    if (body.cableId !== null && !(await coversCable(tx, revisionId, body.cableId))) {
       throw AppError.ofField('cableId', 'The revision does not cover this cable.');
     }
     await tx.insert(checkComments).values({

@@ -29,7 +29,9 @@ export async function loadRevisionView(tx: Tx, actor: Actor, revisionId: string)
     textVersion: revision.textVersion,
     deputyUserId: revision.deputyUserId,
     authorUserId: revision.authorUserId,
-    ...shown,
+    content: shown.content,
+    contentSha256: shown.contentSha256,
+    blockers: shown.blockers,
     ticks: await listTicks(tx, revisionId, nameOf),
     comments: await listComments(tx, revisionId),
     signatures: await listSignatures(tx, revisionId),
@@ -44,6 +46,8 @@ export async function loadRevisionView(tx: Tx, actor: Actor, revisionId: string)
 
 interface ShownContent {
   content: ReportContent;
+  /** Its canonical JSON: the text that is hashed. */
+  contentJson: string;
   contentSha256: string;
   blockers: Blocker[];
 }
@@ -52,11 +56,11 @@ interface ShownContent {
 export async function contentNow(tx: Tx, loaded: LoadedRevision): Promise<ShownContent> {
   const { state, approvedSubmissionId, id } = loaded.revision;
   if (state === 'draft' || state === 'returned') {
-    const { content, contentSha256, blockers } = await draftContent(tx, loaded);
-    return { content, contentSha256, blockers };
+    const { content, text, contentSha256, blockers } = await draftContent(tx, loaded);
+    return { content, contentJson: text, contentSha256, blockers };
   }
-  const submission = approvedSubmissionId === null ? await latestSubmission(tx, id) : await loadSubmission(tx, approvedSubmissionId);
-  return { content: contentOf(submission!), contentSha256: submission!.contentSha256, blockers: [] };
+  const submission = await loadSubmission(tx, approvedSubmissionId ?? (await latestSubmission(tx, id))!.id);
+  return { content: contentOf(submission!), contentJson: submission!.content, contentSha256: submission!.contentSha256, blockers: [] };
 }
 
 type NameOf = (userId: string) => string;

@@ -1,15 +1,16 @@
 import { type ReportContent, reportContent } from '@strandnote/core/report-content';
 import { schema, type Tx } from '@strandnote/db';
-import { desc, eq } from 'drizzle-orm';
+import { desc, eq, getTableColumns } from 'drizzle-orm';
 
 const { submissions } = schema;
 
 export type SubmissionRow = typeof submissions.$inferSelect;
 
-/** The last submission of a revision; null where it was never submitted. */
-export async function latestSubmission(tx: Tx, revisionId: string): Promise<SubmissionRow | null> {
+/** The last submission of a revision, without its content, which may be megabytes; null where it was never submitted. */
+export async function latestSubmission(tx: Tx, revisionId: string): Promise<Omit<SubmissionRow, 'content'> | null> {
+  const { content: _content, ...columns } = getTableColumns(submissions);
   const [row] = await tx
-    .select()
+    .select(columns)
     .from(submissions)
     .where(eq(submissions.revisionId, revisionId))
     .orderBy(desc(submissions.number))

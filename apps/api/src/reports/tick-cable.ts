@@ -5,9 +5,9 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
-import { lockRevision } from './load-revision.ts';
+import { coversCable, lockRevision } from './load-revision.ts';
 import { assertNow } from './revision-situation.ts';
-import { contentOf, latestSubmission, type SubmissionRow } from './submissions.queries.ts';
+import { latestSubmission } from './submissions.queries.ts';
 
 const { cableChecks } = schema;
 
@@ -45,11 +45,8 @@ export async function untickCable(deps: AppDeps, actor: Actor, revisionId: strin
   });
 }
 
-async function submissionInCheck(tx: Tx, actor: Actor, revisionId: string, cableId: string): Promise<SubmissionRow> {
+async function submissionInCheck(tx: Tx, actor: Actor, revisionId: string, cableId: string): Promise<{ id: string }> {
   await assertNow(tx, actor, await lockRevision(tx, revisionId), 'tick');
-  const submission = (await latestSubmission(tx, revisionId))!;
-  if (!contentOf(submission).cables.some(({ id }) => id === cableId)) {
-    throw new AppError('not-found', 'The revision does not cover this cable.');
-  }
-  return submission;
+  if (!(await coversCable(tx, revisionId, cableId))) throw new AppError('not-found', 'The revision does not cover this cable.');
+  return (await latestSubmission(tx, revisionId))!;
 }
