@@ -38,6 +38,7 @@ export {
 // Errors
 export { EstimationError, type EstimationErrorCode } from './errors.ts';
 // The fit
+export { type ChangeOptions, type TensionChange, tensionChange } from './fit/change.ts';
 export { estimateTension } from './fit/estimate-tension.ts';
 export { fitHingedLine, fitLine, type HingedLineFit, type LineFit } from './fit/linear-fit.ts';
 export { type PlausibilityQuestion, questionPlausibility } from './fit/plausibility.ts';
@@ -53,10 +54,15 @@ export {
   type StiffnessPrior,
   type TensionEstimate,
 } from './fit/tension-estimate.ts';
+export { modeShape } from './models/mode-shape.ts';
 // Forward models
 export { type CableState, naturalFrequencies } from './models/natural-frequencies.ts';
+export { type FormulaCable, type FormulaTension, practicalFormulas } from './models/practical-formulas.ts';
 export { stiffStringFrequencies } from './models/stiff-string.ts';
 export { tautStringFrequencies, tautStringTension } from './models/taut-string.ts';
+// Mode numbers
+export { auditNumbering, type NumberingAudit } from './modes/audit-numbering.ts';
+export { type ModeNumbering, type NumberingOptions, numberModes } from './modes/number-modes.ts';
 
 // Units
 export {

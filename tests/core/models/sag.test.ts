@@ -7,10 +7,10 @@ function expectRelative(actual: number, expected: number, tolerance: number) {
 
 /** Frequencies over that of the taut string, for a level string of the λ² wanted. */
 function stringRatios(lambdaSquared: number, count: number): number[] {
-  const cable = { length: 100, massPerLength: 1, inclination: 0, ends: ['hinged', 'hinged'] as ['hinged', 'hinged'] };
+  const cable = { length: 100, massPerLength: 1000, inclination: 0, ends: ['hinged', 'hinged'] as ['hinged', 'hinged'] };
   const tension = 1e6;
   const unit = sagExtensibility({ ...cable, axialStiffness: 1 }, tension);
-  const fundamental = Math.sqrt(tension) / 200;
+  const fundamental = Math.sqrt(tension / 1000) / 200;
   const axialStiffness = lambdaSquared / unit;
   return naturalFrequencies({ ...cable, axialStiffness }, { tension, bendingStiffness: 0 }, count).map((f) => f / fundamental);
 }

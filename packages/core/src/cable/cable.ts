@@ -78,7 +78,7 @@ export function checkCable(cable: Cable): void {
   assertRange(cable.massPerLength, 'massPerLength', 0, 1e6, true);
   if (cable.bendingStiffness !== undefined) assertRange(cable.bendingStiffness, 'bendingStiffness', 0, 1e15);
   if (cable.bendingStiffnessBounds !== undefined) checkBounds(cable.bendingStiffnessBounds);
-  if (cable.axialStiffness !== undefined) assertRange(cable.axialStiffness, 'axialStiffness', 0, 1e15, true);
+  if (cable.axialStiffness !== undefined) assertRange(cable.axialStiffness, 'axialStiffness', 0, 1e18, true);
   if (cable.inclination !== undefined) assertRange(cable.inclination, 'inclination', -Math.PI / 2, Math.PI / 2);
   if (cable.ends !== undefined) {
     if (!Array.isArray(cable.ends) || cable.ends.length !== 2) throw new EstimationError('missing', 'ends', 'A cable has two ends.');

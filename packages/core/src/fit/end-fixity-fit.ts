@@ -15,6 +15,7 @@
  */
 import type { FitProblem } from './fit-problem.ts';
 import { type FixityNode, gaussLegendre } from './fixity-nodes.ts';
+import { truncatedNormal } from './mixture.ts';
 import { fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace, type StiffnessFreedom } from './node-fit.ts';
 import { logPrior, type StiffnessPlan } from './stiffness-plan.ts';
 
@@ -64,7 +65,8 @@ export function fitFixity(
     else {
       const freedom: StiffnessFreedom = plan.kind === 'fixed' ? { kind: 'fixed' } : { kind: 'free', mean: plan.mean, weight: plan.weight };
       const fit = fitNode(problem, node.first, node.second, start, freedom, work, correction);
-      components.push(component(problem, node, group, fit, freedom, Math.log(node.prior), work));
+      const whole = component(problem, node, group, fit, freedom, Math.log(node.prior), work);
+      components.push(plan.kind === 'fitted' && plan.bounds !== null ? cutToBounds(whole, plan.bounds) : whole);
     }
     const begun = components[first]!.fit;
     start = { logTension: begun.logTension, logStiffness: begun.logStiffness };
@@ -114,7 +116,9 @@ function component(
   const free = freedom.kind === 'free';
   let [tt, te, ee] = [0, 0, 0];
   for (let i = 0; i < weights.length; i++) {
-    const [w, jt, je] = [weights[i]!, work.byTension[i]!, work.byStiffness[i]!];
+    const w = weights[i]!;
+    const jt = work.byTension[i]!;
+    const je = work.byStiffness[i]!;
     tt += w * jt * jt;
     te += w * jt * je;
     ee += w * je * je;
@@ -131,6 +135,33 @@ function component(
     length: inputSlope(work.byLength, weights, work, ctt, cte),
     mass: inputSlope(work.byMass, weights, work, ctt, cte),
     axialStiffness: inputSlope(work.byAxialStiffness, weights, work, ctt, cte),
+  };
+}
+
+/**
+ * A node whose ln EI is known to lie within bounds: its normal distribution is cut there, and ln T follows along the valley.
+ *
+ * Source: moments of a truncated normal distribution.
+ */
+function cutToBounds(whole: PosteriorNode, [low, high]: [number, number]): PosteriorNode {
+  const { fit } = whole;
+  const sd = Math.sqrt(fit.varianceStiffness);
+  const cut = truncatedNormal((low - fit.logStiffness) / sd, (high - fit.logStiffness) / sd);
+  const slope = fit.covariance / fit.varianceStiffness;
+  const lost = fit.varianceStiffness * (1 - cut.variance);
+  return {
+    ...whole,
+    logWeight: whole.logWeight + cut.logMass,
+    // What the bounds take from the variance, they take from that of the frequencies.
+    frequencyVariance: Math.max(0, whole.frequencyVariance - slope ** 2 * lost),
+    fit: {
+      ...fit,
+      logTension: fit.logTension + slope * sd * cut.mean,
+      logStiffness: fit.logStiffness + sd * cut.mean,
+      varianceTension: fit.varianceTension - slope ** 2 * lost,
+      covariance: fit.covariance * cut.variance,
+      varianceStiffness: fit.varianceStiffness * cut.variance,
+    },
   };
 }
 

@@ -10,12 +10,13 @@ import { assertRange, EstimationError } from '../errors.ts';
 import { type FitFindings, fitDiagnostics, fitWarnings } from './diagnostics.ts';
 import { fitFixity, normalisedWeights } from './end-fixity-fit.ts';
 import { buildProblem, type FitProblem } from './fit-problem.ts';
-import { type EndNode, type FixityNode, fixityNodes, fixityRange, isKnownEnd } from './fixity-nodes.ts';
+import { type EndNode, type FixityNode, fixityNodes } from './fixity-nodes.ts';
 import { type SettledNoise, settleNoise, stiffnessIsFitted } from './frequency-noise.ts';
 import { modelCorrection } from './model-correction.ts';
 import { type BracketFit, modelResiduals, modelTable } from './model-table.ts';
 import { type ModelCorrection, type NodeWorkspace, nodeWorkspace } from './node-fit.ts';
 import { assemblePosterior, inputUncertainty, type LengthShift, type Posterior } from './posterior.ts';
+import { scoutEnds } from './scout-ends.ts';
 import { ENGINE_VERSION, type EstimateOptions, type TensionEstimate } from './tension-estimate.ts';
 import { uncertaintyBudget } from './uncertainty-budget.ts';
 
@@ -65,19 +66,6 @@ function checkOptions(options: EstimateOptions): void {
 
 const hinged: EndNode = { fixity: 0, stiffness: null };
 const clamped: EndNode = { fixity: 1, stiffness: null };
-
-/** Pairs of ends that span what the ends of this cable may be. */
-function scoutEnds(cable: Cable): [EndNode, EndNode][] {
-  const ends = cable.ends ?? ['unknown', 'unknown'];
-  const at = (end: (typeof ends)[number], u: number): EndNode => {
-    const range = fixityRange(end);
-    return range === null
-      ? { fixity: 0, stiffness: (end as { rotationalStiffness: number }).rotationalStiffness }
-      : { fixity: range[0] + u * (range[1] - range[0]), stiffness: null };
-  };
-  const places = ends.every(isKnownEnd) ? [0] : [0, 0.5, 1];
-  return places.map((u) => [at(ends[0], u), at(ends[1], u)]);
-}
 
 /** Short cables with good frequencies tell more of their ends: the quadrature is refined. */
 function isSharp({ problem, plan }: SettledNoise): boolean {

@@ -113,3 +113,27 @@ export function chiSquaredExceedance(value: number, degrees: number): number {
   const variance = 2 / (9 * degrees);
   return 1 - normalProbability(((value / degrees) ** (1 / 3) - (1 - variance)) / Math.sqrt(variance));
 }
+
+/**
+ * A standard normal variable cut to [low, high]: log of the mass within, mean and variance there.
+ *
+ * Far out in a tail the mass underflows; there the variable sits within 1/|z| of the nearer bound (Mills' ratio).
+ */
+export function truncatedNormal(low: number, high: number): { logMass: number; mean: number; variance: number } {
+  const density = (z: number) => (Number.isFinite(z) ? Math.exp(-0.5 * z * z) / Math.sqrt(2 * Math.PI) : 0);
+  const near = low > 0 ? low : high < 0 ? -high : 0;
+  if (near > 4) {
+    const mean = (low > 0 ? 1 : -1) * (near + 1 / near);
+    return { logMass: -0.5 * near * near - Math.log(near * Math.sqrt(2 * Math.PI)), mean, variance: 1 / near ** 2 };
+  }
+  const mass = normalProbability(high) - normalProbability(low);
+  if (!(mass > 1e-6))
+    return {
+      logMass: Math.log(Math.max(high - low, 1e-300)) + Math.log(density(near)),
+      mean: (low + high) / 2,
+      variance: (high - low) ** 2 / 12,
+    };
+  const mean = (density(low) - density(high)) / mass;
+  const variance = 1 + (low * density(low) - high * density(high)) / mass - mean * mean;
+  return { logMass: Math.log(mass), mean, variance: Math.min(1, Math.max(0, variance)) };
+}

@@ -1,6 +1,7 @@
 /**
  * The ladder of models side by side, so that a reader sees what each of them would have said.
  */
+import { practicalFormulas } from '../models/practical-formulas.ts';
 import type { FitProblem } from './fit-problem.ts';
 import type { EndNode } from './fixity-nodes.ts';
 import { fitHingedLine } from './linear-fit.ts';
@@ -102,7 +103,23 @@ export function modelTable(
       modelResiduals(problem, [node.first, node.second], fit, work, correction),
       fittedParameters,
     ),
+    ...formulaRows(problem, Math.exp(posterior.logStiffness)),
   ];
+}
+
+function formulaRows(problem: FitProblem, bendingStiffness: number): ModelRow[] {
+  const { length, massPerLength } = problem;
+  return practicalFormulas({ length, massPerLength, bendingStiffness }, problem.peaks).map(({ id, name, tension, note }) => ({
+    id,
+    name,
+    tension,
+    bendingStiffness: null,
+    residuals: [],
+    chiSquared: null,
+    degreesOfFreedom: null,
+    aicc: null,
+    note,
+  }));
 }
 
 function stringRow(problem: FitProblem): ModelRow {

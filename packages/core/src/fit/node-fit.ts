@@ -152,9 +152,17 @@ interface Quadratic {
 function quadratic(problem: FitProblem, work: NodeWorkspace, freedom: StiffnessFreedom, e: number): Quadratic {
   const { residuals, byTension, byStiffness } = work;
   const { weights } = problem;
-  let [tt, te, ee, gt, ge, chiSquared] = [0, 0, 0, 0, 0, 0];
+  let tt = 0;
+  let te = 0;
+  let ee = 0;
+  let gt = 0;
+  let ge = 0;
+  let chiSquared = 0;
   for (let i = 0; i < weights.length; i++) {
-    const [w, r, jt, je] = [weights[i]!, residuals[i]!, byTension[i]!, byStiffness[i]!];
+    const w = weights[i]!;
+    const r = residuals[i]!;
+    const jt = byTension[i]!;
+    const je = byStiffness[i]!;
     tt += w * jt * jt;
     te += w * jt * je;
     ee += w * je * je;
@@ -215,7 +223,8 @@ export function evaluateModel(
     work.wavenumbers[i] = x;
     const square = x * x + xi * xi;
     const byXi = solution[1]! * xi;
-    const [first1, second1] = [solution[2]! * work.first.b, solution[3]! * work.second.b];
+    const first1 = solution[2]! * work.first.b;
+    const second1 = solution[3]! * work.second.b;
     // A fixity follows ξ; a given stiffness follows 1/EI.
     const following = byXi + (first.stiffness === null ? first1 : 0) + (second.stiffness === null ? second1 : 0);
     const xt = following / 2;

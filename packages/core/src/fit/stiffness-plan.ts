@@ -9,15 +9,16 @@ import type { StiffnessPrior } from './tension-estimate.ts';
 /** Where a fit starts, and what happens to ln EI in it. */
 export type StiffnessPlan = { start: { logTension: number; logStiffness: number }; lowestChiSquared: number; spread: number } & (
   | { kind: 'fixed' }
-  | { kind: 'fitted'; mean: number; weight: number }
+  /** Under a log-normal prior; a weight of zero where bounds alone are known, which then cut the result. */
+  | { kind: 'fitted'; mean: number; weight: number; bounds: [number, number] | null }
   /** Quadrature over a range of ln EI with so many nodes. */
   | { kind: 'integrated'; range: [number, number]; nodes: number }
 );
 
 /** Beyond this posterior standard deviation of ln EI a normal approximation is not trusted. */
 const widestGaussian = 0.2;
-/** Evidence below exp(−10) of the highest is left out. */
-const deepestDrop = 20;
+/** Evidence below exp(−7) of the highest is left out: 3.7 standard deviations. */
+const deepestDrop = 14;
 const gridPoints = 7;
 
 /** Log-density of the prior on ln EI, up to a constant. */
@@ -52,19 +53,44 @@ export function planStiffness(
     const best = lowest(fits);
     return { kind: 'fixed', start: { logTension: best.logTension, logStiffness }, lowestChiSquared: best.chiSquared, spread: 0 };
   }
-  if (prior.kind === 'value') {
-    const spread = priorSpread(prior);
-    const [mean, weight] = [Math.log(prior.value), 1 / spread ** 2];
-    const fits = scouts.map(([a, b]) =>
-      fitNode(problem, a, b, { logTension, logStiffness: mean }, { kind: 'free', mean, weight }, work, correction),
-    );
-    const best = lowest(fits);
-    const found = { start: best, lowestChiSquared: best.chiSquared, spread: Math.sqrt(best.varianceStiffness) };
-    if (fits.every((fit) => fit.converged && Math.sqrt(fit.varianceStiffness) <= widestGaussian))
-      return { kind: 'fitted', mean, weight, ...found };
-    return locateRange(problem, scouts, [mean - 4.5 * spread, mean + 4.5 * spread], logTension, work, correction);
+  const bounds: [number, number] | null = prior.kind === 'value' ? null : [Math.log(prior.bounds[0]), Math.log(prior.bounds[1])];
+  const spread = prior.kind === 'value' ? priorSpread(prior) : Number.POSITIVE_INFINITY;
+  const mean = bounds === null ? Math.log((prior as StiffnessPrior & { kind: 'value' }).value) : (bounds[0] + bounds[1]) / 2;
+  const weight = 1 / spread ** 2;
+  const fits = scouts.map(([a, b]) => freeFit(problem, a, b, { logTension, logStiffness: mean }, mean, weight, bounds, work, correction));
+  const best = lowest(fits);
+  const sharpest = Math.min(...fits.map((fit) => Math.sqrt(fit.varianceStiffness)));
+  if (fits.every((fit) => fit.converged && Math.sqrt(fit.varianceStiffness) <= widestGaussian)) {
+    return {
+      kind: 'fitted',
+      mean,
+      weight,
+      bounds,
+      start: best,
+      lowestChiSquared: best.chiSquared,
+      spread: Math.sqrt(best.varianceStiffness),
+    };
   }
-  return locateRange(problem, scouts, [Math.log(prior.bounds[0]), Math.log(prior.bounds[1])], logTension, work, correction);
+  return locateRange(problem, scouts, bounds ?? [mean - 4.5 * spread, mean + 4.5 * spread], logTension, sharpest, work, correction);
+}
+
+/**
+ * A fit of both, within a broad normal prior over the bounds where there are no better ones, so that it cannot run away; its
+ * spread is then that of the frequencies alone.
+ */
+function freeFit(
+  problem: FitProblem,
+  first: EndNode,
+  second: EndNode,
+  start: { logTension: number; logStiffness: number },
+  mean: number,
+  weight: number,
+  bounds: [number, number] | null,
+  work: NodeWorkspace,
+  correction: ModelCorrection | null,
+): NodeFit {
+  const broad = bounds === null ? weight : 1 / (bounds[1] - bounds[0]) ** 2;
+  return fitNode(problem, first, second, start, { kind: 'free', mean, weight: broad }, work, correction);
 }
 
 function lowest(fits: readonly NodeFit[]): NodeFit {
@@ -77,6 +103,7 @@ function locateRange(
   scouts: readonly [EndNode, EndNode][],
   whole: [number, number],
   logTension: number,
+  sharpest: number,
   work: NodeWorkspace,
   correction: ModelCorrection | null,
 ): StiffnessPlan {
@@ -105,7 +132,8 @@ function locateRange(
     relief = Math.max(...objectives.slice(from, to + 1)) - best.objective;
     if (enough) break;
   }
-  // Flat evidence needs few nodes; a sharp summit within a wide range needs many.
-  const nodes = relief < 3 ? 5 : relief < 12 ? 8 : 12;
+  // Flat evidence needs few nodes. At one fixity the evidence may be much sharper than over all of them: the nodes keep up.
+  const smooth = relief < 3 ? 5 : 8;
+  const nodes = Math.max(smooth, Math.min(24, Math.ceil((range[1] - range[0]) / (1.3 * sharpest)) + 2));
   return { kind: 'integrated', range, nodes, start: best, lowestChiSquared: best.chiSquared, spread: (range[1] - range[0]) / 6 };
 }

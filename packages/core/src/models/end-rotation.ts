@@ -124,9 +124,12 @@ function endCoupling(mode: number, x: number, xi: number, first: EndForm, second
   const y = Math.sqrt(x * x + xi * xi);
   const e = Math.exp(-y);
   const n = x * x + y * y;
-  const [d1, d2] = [first.a * n + first.b * y, second.a * n + second.b * y];
-  const [m1, m2] = [first.a * n - first.b * y, second.a * n - second.b * y];
-  const [b1x, b2x] = [first.b * x, second.b * x];
+  const d1 = first.a * n + first.b * y;
+  const d2 = second.a * n + second.b * y;
+  const m1 = first.a * n - first.b * y;
+  const m2 = second.a * n - second.b * y;
+  const b1x = first.b * x;
+  const b2x = second.b * x;
   const rho = Math.sqrt((d1 * d1 + b1x * b1x) * (d2 * d2 + b2x * b2x));
   const right = -4 * e * b1x * second.b * y + e * e * ((m1 * m2 - b1x * b2x) * Math.sin(x) - (b1x * m2 + b2x * m1) * Math.cos(x));
   const sine = Math.max(-1, Math.min(1, right / rho));

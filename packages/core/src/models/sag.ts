@@ -75,8 +75,17 @@ export function sagWavenumbers(
  *
  * @param low wavenumber without sag below it
  * @param high the next one above
+ * @param near where it is expected, if that is known
  */
-export function sagWavenumber(low: number, high: number, xi: number, lambdaSquared: number, first: EndForm, second: EndForm): number {
+export function sagWavenumber(
+  low: number,
+  high: number,
+  xi: number,
+  lambdaSquared: number,
+  first: EndForm,
+  second: EndForm,
+  near = 0,
+): number {
   const square = (x: number) => x * x * (x * x + xi * xi);
   const [qLow, qHigh] = [square(low), square(high)];
   // Both poles are multiplied away: what is left is smooth and rises from below zero to above.
@@ -85,6 +94,12 @@ export function sagWavenumber(low: number, high: number, xi: number, lambdaSquar
     return sagFunction(x, xi, lambdaSquared, first, second) * ((q - qLow) / qLow) * ((qHigh - q) / qHigh);
   };
   const [from, to] = [low * (1 + poleRoom), high * (1 - poleRoom)];
+  if (near > from && near < to) {
+    const reach = 0.02 * (near - low);
+    const [below, above] = [Math.max(from, near - reach), Math.min(to, near + reach)];
+    const [atBelow, atAbove] = [smooth(below), smooth(above)];
+    if (atBelow < 0 && atAbove > 0) return bracketedRoot(smooth, below, above, atBelow, atAbove);
+  }
   const [atFrom, atTo] = [smooth(from), smooth(to)];
   if (!(atFrom < 0)) return low;
   if (!(atTo > 0)) return high;

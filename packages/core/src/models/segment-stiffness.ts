@@ -45,9 +45,14 @@ export function emptySegment(): SegmentStiffness {
  */
 export function beamSegment(alpha: number, beta: number, length: number, bendingStiffness: number, out: SegmentStiffness): void {
   const e = Math.exp(-alpha * length);
-  const [one, ch, sh] = [2 * e, 1 + e * e, 1 - e * e];
-  const [s, c] = [Math.sin(beta * length), Math.cos(beta * length)];
-  const [aa, bb, ab] = [alpha * alpha, beta * beta, alpha * beta];
+  const one = 2 * e;
+  const ch = 1 + e * e;
+  const sh = 1 - e * e;
+  const s = Math.sin(beta * length);
+  const c = Math.cos(beta * length);
+  const aa = alpha * alpha;
+  const bb = beta * beta;
+  const ab = alpha * beta;
   const delta = 2 * ab * (one - c * ch) + (aa - bb) * s * sh;
   const n = (bendingStiffness * (aa + bb)) / delta;
   out.k11 = n * ab * (beta * s * ch + alpha * c * sh);
