@@ -15,7 +15,8 @@ import { keepDemonstrationIdentity } from '../../apps/api/src/reports/pdf/demons
 import { type ReceivedMail, startMailServer } from './mail-server.ts';
 import { createTestDatabase } from './test-database.ts';
 
-const password = 'correct horse battery staple';
+/** Everybody's in tests. */
+export const password = 'correct horse battery staple';
 const fromApi = createRequire(new URL('../../apps/api/package.json', import.meta.url));
 const { Logger, runOnce } = fromApi('graphile-worker') as typeof import('../../apps/api/node_modules/graphile-worker');
 
@@ -29,17 +30,17 @@ export interface Reply {
   bytes: Buffer;
 }
 
+type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';
+type Methods = Record<Method, (path: string, body?: object) => Promise<Reply>>;
+
 /** A person signed in, in one firm: paths are below /api/v1/firms/:firmId. */
-export interface SignedIn {
+export interface SignedIn extends Methods {
   userId: string;
   name: string;
   email: string;
   password: string;
-  get: (path: string) => Promise<Reply>;
-  post: (path: string, body?: object) => Promise<Reply>;
-  put: (path: string, body?: object) => Promise<Reply>;
-  patch: (path: string, body?: object) => Promise<Reply>;
-  delete: (path: string) => Promise<Reply>;
+  /** The same session, with paths below another firm. */
+  elsewhere: (firmId: string) => Methods;
 }
 
 export interface TestServer {
@@ -51,7 +52,7 @@ export interface TestServer {
   createFirm: (name?: string) => Promise<string>;
   createClient: (firmId: string, name?: string) => Promise<string>;
   join: (firmId: string, person: { name: string; roles: Role[]; clientId?: string }) => Promise<SignedIn>;
-  anonymous: (method: 'get' | 'post' | 'put' | 'patch' | 'delete', path: string, body?: object) => Promise<Reply>;
+  anonymous: (method: Method, path: string, body?: object) => Promise<Reply>;
   /** Runs every job in the queue to its end, as the worker would. */
   runJobs: () => Promise<void>;
   stop: () => Promise<void>;
@@ -80,12 +81,7 @@ export async function startTestServer(): Promise<TestServer> {
   await superuser.connect();
   let people = 0;
 
-  async function call(
-    method: 'get' | 'post' | 'put' | 'patch' | 'delete',
-    path: string,
-    cookie: string | null,
-    body?: object,
-  ): Promise<Reply> {
+  async function call(method: Method, path: string, cookie: string | null, body?: object): Promise<Reply> {
     const request = supertest(app)[method](path).set('Origin', env.publicUrl).buffer(true).parse(readBytes);
     if (cookie !== null) request.set('Cookie', cookie);
     const reply = body === undefined ? await request : await request.send(body);
@@ -127,10 +123,11 @@ export async function startTestServer(): Promise<TestServer> {
       clientId ?? null,
     ]);
     const cookie = await signIn(email);
-    const inFirm = (method: 'get' | 'post' | 'put' | 'patch' | 'delete') => (path: string, body?: object) =>
-      call(method, `/api/v1/firms/${firmId}${path}`, cookie, body);
-    const methods = { get: inFirm('get'), post: inFirm('post'), put: inFirm('put'), patch: inFirm('patch'), delete: inFirm('delete') };
-    return { userId, name, email, password, ...methods };
+    const below = (id: string): Methods => {
+      const inFirm = (method: Method) => (path: string, body?: object) => call(method, `/api/v1/firms/${id}${path}`, cookie, body);
+      return { get: inFirm('get'), post: inFirm('post'), put: inFirm('put'), patch: inFirm('patch'), delete: inFirm('delete') };
+    };
+    return { userId, name, email, password, ...below(firmId), elsewhere: below };
   }
 
   async function signIn(email: string): Promise<string> {
