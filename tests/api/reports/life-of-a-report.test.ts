@@ -95,6 +95,52 @@ test('goes from draft through a return to an issued report, and is superseded by
   expect(verified).toMatchObject({ state: 'withdrawn', reportNumber: 'SN-0001', letter: 'B', sha256: list[0].sha256 });
 });
 
+test('signs the very bytes that were rendered at approval', async () => {
+  const { rows } = await server.superuser.query(
+    `select (select string_agg(data, '' order by index) from file_chunks c where c.file_id = r.unsigned_file_id) as unsigned,
+       (select string_agg(data, '' order by index) from file_chunks c where c.file_id = r.signed_file_id) as signed
+     from revisions r where r.letter = 'A' and r.signed_file_id is not null`,
+  );
+  const { unsigned, signed } = rows[0] as { unsigned: Buffer; signed: Buffer };
+  // A line break after the last mark of the file is all that may go.
+  expect(unsigned.subarray(signed.length).toString('latin1').trim()).toBe('');
+  expect(signed.subarray(-5).toString('latin1')).toBe('%%EOF');
+  const differing = [...signed.keys()].filter((place) => signed[place] !== unsigned[place]);
+  const { index } = /\/ByteRange/.exec(signed.toString('latin1'))!;
+  const end = signed.indexOf('endobj', index);
+  expect(differing.length).toBeGreaterThan(1000);
+  // Nothing but the signature's own object: its byte range, its time and itself.
+  expect(differing[0]).toBeGreaterThan(signed.lastIndexOf('endobj', index));
+  expect(differing.at(-1)).toBeLessThan(end);
+});
+
+test('shows the PDF of a draft as it would look, and keeps nothing of it', async () => {
+  const { revisionId } = await draftReport(engineer, bridge.campaignId, clientId);
+  const filesBefore = (await server.superuser.query('select count(*) from files')).rows[0].count;
+  const preview = await ok(checker.get(`/revisions/${revisionId}/preview.pdf`));
+  expect(preview.headers['content-type']).toBe('application/pdf');
+  expect(preview.bytes.subarray(0, 5).toString('latin1')).toBe('%PDF-');
+  expect((await server.superuser.query('select count(*) from files')).rows[0].count).toBe(filesBefore);
+});
+
+test('renders the PDF of an approval once, however often the job runs', async () => {
+  const { revisionId } = await draftReport(engineer, bridge.campaignId, clientId);
+  await approveDraft({ engineer, checker, runJobs: server.runJobs }, revisionId);
+  const { rows } = await server.superuser.query('select firm_id, unsigned_file_id, approved_submission_id from revisions where id = $1', [
+    revisionId,
+  ]);
+  const { firm_id: firmId, unsigned_file_id: file, approved_submission_id: submissionId } = rows[0];
+  const again = JSON.stringify({ firmId, userId: checker.userId, revisionId, submissionId });
+  await server.superuser.query("select graphile_worker.add_job('render-report', $1::json)", [again]);
+  await server.runJobs();
+  const after = await server.superuser.query('select unsigned_file_id from revisions where id = $1', [revisionId]);
+  expect(after.rows[0].unsigned_file_id).toBe(file);
+  const rendered = await server.superuser.query("select 1 from audit_events where act = 'revision.rendered' and subject_id = $1", [
+    revisionId,
+  ]);
+  expect(rendered.rowCount).toBe(1);
+});
+
 test('recalls a revision that is in check, and keeps what was submitted', async () => {
   const { revisionId } = await draftReport(engineer, bridge.campaignId, clientId);
   await ok(submit(engineer, revisionId));
