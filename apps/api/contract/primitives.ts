@@ -11,9 +11,9 @@ export function typedText(maximum = 200) {
   return z.string().trim().min(1, 'Write something here.').max(maximum, `At most ${maximum} characters.`);
 }
 
-/** Text that may be left empty. */
+/** Text that may be empty. Without a default: in a partial edit a default would empty what was not sent. */
 export function optionalText(maximum = 2000) {
-  return z.string().trim().max(maximum, `At most ${maximum} characters.`).default('');
+  return z.string().trim().max(maximum, `At most ${maximum} characters.`);
 }
 
 export const emailAddress = z.string().trim().toLowerCase().pipe(z.email('An e-mail address looks like name@firm.example.'));

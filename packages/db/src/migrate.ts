@@ -49,6 +49,17 @@ export async function prepareDatabase(superuserUrl: string, passwords: RolePassw
   return urls;
 }
 
+/** Makes a database where there is none of that name. @returns its address as the superuser */
+export async function ensureDatabase(superuserUrl: string, name: string): Promise<string> {
+  await asSuperuser(superuserUrl, async (client) => {
+    const { rowCount } = await client.query('SELECT 1 FROM pg_database WHERE datname = $1', [name]);
+    if (rowCount === 0) await client.query(`CREATE DATABASE ${pg.escapeIdentifier(name)}`);
+  });
+  const url = new URL(superuserUrl);
+  url.pathname = `/${name}`;
+  return url.toString();
+}
+
 function roleUrls(superuserUrl: string, passwords: RolePasswords): RoleUrls {
   const urlOf = (role: keyof RolePasswords) => {
     const url = new URL(superuserUrl);

@@ -18,12 +18,12 @@ export function RevisionTexts({ revision }: { revision: Revision }) {
   return (
     <Stack gap={3}>
       <Heading level={2}>Texts</Heading>
-      {revision.may.edit === null ? <TextsForm revision={revision} /> : <TextsRead texts={revision.texts} />}
+      {revision.may.edit === null ? <TextsForm revision={revision} /> : <RevisionTextsRead texts={revision.texts} />}
     </Stack>
   );
 }
 
-function TextsRead({ texts }: { texts: ReportTexts }) {
+export function RevisionTextsRead({ texts }: { texts: ReportTexts }) {
   return (
     <Stack gap={3}>
       {fields.map(({ name, label }) => (

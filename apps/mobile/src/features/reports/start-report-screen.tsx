@@ -8,7 +8,7 @@ import { useClientsQuery } from '../clients/clients.api.ts';
 import { useCreateReportMutation } from './reports.api.ts';
 
 /** Starts the report of a campaign: whom it is for and what it is called. */
-export function NewReportScreen() {
+export function StartReportScreen() {
   const firm = useFirm();
   const { campaign: campaignId } = useLocalSearchParams<{ campaign: string }>();
   const campaign = useCampaignQuery(firm.firmId, campaignId);
@@ -25,7 +25,7 @@ export function NewReportScreen() {
   const { structureName, name } = campaign.data;
   return (
     <Page title={title} breadcrumb={[{ label: structureName }, { label: name, href: `/${firm.firmId}/site/${campaignId}` }]} narrow>
-      <NewReportForm
+      <StartReportForm
         campaignId={campaignId}
         suggestedTitle={`Cable tensions of ${structureName}, ${name}`}
         clients={clients.data.items.map((client) => ({ value: client.id, label: client.name }))}
@@ -34,13 +34,13 @@ export function NewReportScreen() {
   );
 }
 
-interface NewReportFormProps {
+interface StartReportFormProps {
   campaignId: string;
   suggestedTitle: string;
   clients: { value: string; label: string }[];
 }
 
-function NewReportForm({ campaignId, suggestedTitle, clients }: NewReportFormProps) {
+function StartReportForm({ campaignId, suggestedTitle, clients }: StartReportFormProps) {
   const firm = useFirm();
   const router = useRouter();
   const create = useCreateReportMutation(firm.firmId, campaignId);

@@ -1,0 +1,64 @@
+import { toNodeHandler } from 'better-auth/node';
+import express, { type Express, type RequestHandler } from 'express';
+import helmet from 'helmet';
+import { pinoHttp } from 'pino-http';
+import { identityPaths } from './access/auth.ts';
+import { recordSessions } from './access/record-sessions.ts';
+import type { AppDeps } from './deps.ts';
+import { errorHandler } from './http/error-handler.ts';
+import { AppError } from './http/errors.ts';
+import { registerRoutes } from './http/register-routes.ts';
+import { serveWebApp } from './http/web-app.ts';
+import { routes } from './routes.ts';
+
+/** The whole server as one Express application. */
+export function createApp(deps: AppDeps): Express {
+  const app = express();
+  const trust = deps.env.TRUST_PROXY;
+  app.set('trust proxy', /^\d+$/.test(trust) ? Number(trust) : trust);
+  app.disable('x-powered-by');
+  app.use(pinoHttp({ logger: deps.log, redact: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]'] }));
+  app.use(securityHeaders(deps));
+  // Before express.json(): better-auth reads the body itself.
+  app.all('/api/auth/*splat', onlyIdentityPaths, tellAddress, recordSessions(deps), toNodeHandler(deps.auth));
+  app.use('/api/v1', express.json({ limit: '2mb' }), registerRoutes(deps, routes));
+  app.use('/api', () => {
+    throw new AppError('not-found', 'There is no such address in this API.');
+  });
+  if (deps.env.WEB_ROOT !== undefined) app.use(serveWebApp(deps.env.WEB_ROOT));
+  app.use(errorHandler);
+  return app;
+}
+
+function securityHeaders(deps: AppDeps): RequestHandler {
+  const secure = deps.env.publicUrl.startsWith('https:');
+  return helmet({
+    contentSecurityPolicy: {
+      directives: {
+        'default-src': ["'self'"],
+        'script-src': ["'self'"],
+        // React Native Web and expo-font write their styles into a style element.
+        'style-src': ["'self'", "'unsafe-inline'"],
+        'img-src': ["'self'", 'data:', 'blob:'],
+        'font-src': ["'self'", 'data:'],
+        'connect-src': ["'self'"],
+        'frame-ancestors': ["'none'"],
+        'upgrade-insecure-requests': secure ? [] : null,
+      },
+    },
+    strictTransportSecurity: secure,
+    referrerPolicy: { policy: 'same-origin' },
+  });
+}
+
+const onlyIdentityPaths: RequestHandler = (request, _response, next) => {
+  const path = request.path.replace(/^\/api\/auth/, '');
+  if (!identityPaths.some((allowed) => allowed === path)) throw new AppError('not-found', 'There is no such address in this API.');
+  next();
+};
+
+/** The address that rate limits count by comes from Express, which knows the trusted proxies; a header of the caller's does not count. */
+const tellAddress: RequestHandler = (request, _response, next) => {
+  request.headers['x-strandnote-client'] = request.ip ?? 'unknown';
+  next();
+};
