@@ -392,7 +392,7 @@ const frame: Omit<ReportContent, 'cables'> = {
       'Tension of the stays of the crossing by ambient vibration, for comparison with the design tensions at the finished stage. Anchorages, sockets and dampers were not inspected.',
     conditions:
       'The survey took place on three dry days. The deck carried its usual traffic on one lane in each direction; the other lanes were closed for the crew.\n\nSteel temperature was read on the sunny and the shaded side of four stays in the morning and in the afternoon.',
-    deviations: 'Two stays could not be reached because of the painters’ scaffold; they are listed below with the reason.',
+    deviations: 'Two stays could not be reached because of the painters’ scaffold; they are listed with the reason.',
     conclusion:
       'The tensions agree with the design within the agreed limits except where the table says otherwise. We recommend a lift-off reading of the stay found outside, before the resurfacing in spring, and a second visit to the stays that were not measured.',
   },

@@ -44,10 +44,10 @@ export async function sealKeystore({ privateKey, certificates }: Keystore, passp
     hmacHashAlgorithm: 'SHA-512',
     iterationCount: 210_000,
   };
-  const keyBag = new PKCS8ShroudedKeyBag({ parsedValue: PrivateKeyInfo.fromBER(privateKey) });
+  const keyBag = new PKCS8ShroudedKeyBag({ parsedValue: PrivateKeyInfo.fromBER(new Uint8Array(privateKey)) });
   await keyBag.makeInternalValues(encryption as never, cryptoEngine);
   const certBags = certificates.map(
-    (der) => new SafeBag({ bagId: oid.certBag, bagValue: new CertBag({ parsedValue: Certificate.fromBER(der) }) }),
+    (der) => new SafeBag({ bagId: oid.certBag, bagValue: new CertBag({ parsedValue: Certificate.fromBER(new Uint8Array(der)) }) }),
   );
   const contents = [
     new SafeContents({ safeBags: [new SafeBag({ bagId: oid.shroudedKeyBag, bagValue: keyBag })] }),
