@@ -19,13 +19,22 @@ async function start() {
   register();
   const { openInstallation, dataFolder } = await import('./installation.mjs');
   const { exportWeb } = await import('../../mobile/bin/export-web.mjs');
-  const { cluster, environment, demonstration, address } = await openInstallation();
-  exportWeb();
+  const installation = await openInstallation();
+  try {
+    exportWeb();
+    await serve(installation, dataFolder);
+  } catch (error) {
+    installation.cluster.stop();
+    throw error;
+  }
+}
+
+async function serve({ cluster, urls, environment, demonstration, address }, dataFolder) {
   let accounts = null;
   let mailServer = null;
   if (demonstration) {
     const { openDemonstration } = await import('../src/demonstration/open-demonstration.ts');
-    ({ accounts, mailServer } = await openDemonstration(environment, dataFolder));
+    ({ accounts, mailServer } = await openDemonstration(environment, dataFolder, urls.owner));
     environment.SMTP_URL = mailServer.url;
   }
   environment.WEB_ROOT = join(root, 'apps', 'mobile', 'dist');
