@@ -4,6 +4,7 @@ import { useCallback, useEffect, useRef, useState } from 'react';
 import { firmPath } from '../../lib/api-client.ts';
 import { queueEntry } from '../../lib/outbox.ts';
 import { queryClient } from '../../lib/query-client.ts';
+import { useMeQuery } from '../../lib/session.tsx';
 import { campaignKey } from '../campaigns/campaigns.api.ts';
 import { type EntryAction, type EntryDraft, reduceDraft } from './entry-draft.ts';
 import { measurementOf } from './measurement-body.ts';
@@ -28,7 +29,7 @@ function draftKey({ userId, campaignId, spanId, measurementId }: DraftPlace): st
  * A measurement that is being typed: begun afresh or found on the device, and kept there with every change until it is saved.
  * Mount it anew for another place (a `key`).
  */
-export function useEntryDraft(place: DraftPlace, begin: () => EntryDraft, restore: (kept: EntryDraft) => EntryDraft) {
+export function useEntryDraft(place: DraftPlace, begin: () => EntryDraft, restore: (kept: EntryDraft) => EntryDraft, version: number) {
   const storageKey = draftKey(place);
   const [draft, setDraft] = useState<EntryDraft | null>(null);
   const [typed, setTyped] = useState(false);
@@ -59,21 +60,43 @@ export function useEntryDraft(place: DraftPlace, begin: () => EntryDraft, restor
     [storageKey],
   );
   const forget = useCallback(() => del(storageKey), [storageKey]);
-  return { draft, dispatch, typed, forget };
+  const replace = useCallback((next: EntryDraft) => {
+    current.current = next;
+    setDraft(next);
+    setTyped(false);
+  }, []);
+  // A newer version came from the server before anything was typed: typing begins from that.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: only the version is what this answers to
+  useEffect(() => {
+    if (current.current && !typed && version > current.current.version) replace(begin());
+  }, [version]);
+  return { draft, dispatch, typed, forget, replace };
 }
 
-/** Spans with something typed on this device that is not saved yet. */
-export function useDraftedSpans(userId: string | undefined, campaignId: string): ReadonlySet<string> {
-  const [spans, setSpans] = useState<ReadonlySet<string>>(new Set());
+/** What this person typed in a campaign and has not saved: span and visit of each draft. */
+export function useDrafts(campaignId: string): readonly { spanId: string; visit: string }[] {
+  const userId = useMeQuery().data?.userId;
+  const [drafts, setDrafts] = useState<{ spanId: string; visit: string }[]>([]);
   useEffect(() => {
     if (userId === undefined) return;
     const prefix = draftsOf(userId, campaignId);
+    const placeOf = (key: string) => {
+      const [spanId = '', visit = ''] = key.slice(prefix.length).split(' ');
+      return { spanId, visit };
+    };
     keys<string>().then(
-      (found) => setSpans(new Set(found.filter((key) => key.startsWith(prefix)).map((key) => key.slice(prefix.length).split(' ')[0]!))),
+      (found) => setDrafts(found.filter((key) => key.startsWith(prefix)).map(placeOf)),
       (error: unknown) => console.error(error),
     );
   }, [userId, campaignId]);
-  return spans;
+  return drafts;
+}
+
+/** Visits to a span that were typed and not saved: their measurements, or `new`. */
+export function useDraftedVisits(campaignId: string, spanId: string): string[] {
+  return useDrafts(campaignId)
+    .filter((draft) => draft.spanId === spanId)
+    .map(({ visit }) => visit);
 }
 
 export const measurementKey = (measurementId: string) => `measurement:${measurementId}`;

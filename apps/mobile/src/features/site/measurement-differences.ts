@@ -1,0 +1,41 @@
+import type { Measurement, ModalPeak, PutMeasurement } from '@strandnote/api/contract';
+import type { Units } from '../../lib/units.tsx';
+import { dampingWords, excitationWords, planeWords } from './site-words.ts';
+
+/** One thing that two people entered differently, in words. */
+export interface Difference {
+  what: string;
+  mine: string;
+  theirs: string;
+}
+
+/** Where two versions of a measurement differ, peak by peak and answer by answer. */
+export function differencesOf(mine: PutMeasurement, theirs: Measurement, units: Units): Difference[] {
+  const [left, right] = [inWords(mine, units), inWords(theirs, units)];
+  const keys = [...new Set([...left.keys(), ...right.keys()])];
+  return keys
+    .map((what) => ({ what, mine: left.get(what) ?? '–', theirs: right.get(what) ?? '–' }))
+    .filter((difference) => difference.mine !== difference.theirs);
+}
+
+function inWords(entry: PutMeasurement | Measurement, units: Units): Map<string, string> {
+  const peaks = entry.peaks
+    .toSorted((a, b) => a.mode - b.mode || a.plane.localeCompare(b.plane))
+    .map((peak) => [`Mode ${peak.mode}, ${planeWords[peak.plane]}${peak.used ? '' : ', set aside'}`, peakWords(peak)] as const);
+  return new Map([
+    ...peaks,
+    ['Lower damper', dampingWords[entry.lowerDamperState]],
+    ['Upper damper', dampingWords[entry.upperDamperState]],
+    ['Bushing', dampingWords[entry.bushingState]],
+    ['Tied to another cable', entry.crossTied ? 'yes' : 'no'],
+    ['Excitation', excitationWords[entry.excitation]],
+    ['Sensor from the lower end', units.show(entry.sensorPosition, 'length')],
+    ['Steel temperature', units.show(entry.steelTemperature, 'temperature', 1)],
+    ['Note', entry.note || '–'],
+  ]);
+}
+
+function peakWords({ frequency, standardUncertainty, used, setAsideReason }: ModalPeak): string {
+  const uncertainty = standardUncertainty === null ? '' : ` \u00B1 ${standardUncertainty}`;
+  return `${frequency}${uncertainty} Hz${used ? '' : ` (${setAsideReason})`}`;
+}

@@ -1,0 +1,68 @@
+import type { CampaignDetail, Measurement } from '@strandnote/api/contract';
+import { freeLength } from '@strandnote/core';
+import { useDeferredValue, useMemo } from 'react';
+import { useMeQuery } from '../../lib/session.tsx';
+import { useUnits } from '../../lib/units.tsx';
+import type { ChecklistRow } from './checklist-rows.ts';
+import { draftOf, type EntryDraft, inSystem, newDraft } from './entry-draft.ts';
+import { findingsOf } from './entry-findings.ts';
+import { useEntryDraft } from './entry-store.ts';
+import { expectedFrequencies } from './expected-frequencies.ts';
+import { sisterFrequencies, sisterOf } from './sister-cable.ts';
+import { agreedReference } from './survey-decision.ts';
+
+export interface EntryPlace {
+  survey: CampaignDetail;
+  row: ChecklistRow;
+  /** The visit that is opened; null for a new one. */
+  measurement: Measurement | null;
+}
+
+export type Entry = ReturnType<typeof useEntry>;
+
+/** A measurement while it is typed, with all that the device can say of it at once. */
+export function useEntry({ survey, row, measurement }: EntryPlace) {
+  const units = useUnits();
+  const { system } = units;
+  const me = useMeQuery();
+  const timeZone = survey.structureTimeZone;
+  const { span, entry } = row;
+  const kept = useEntryDraft(
+    { userId: me.data?.userId ?? '', campaignId: survey.id, spanId: span.id, measurementId: measurement?.id ?? null },
+    () => (measurement ? draftOf(measurement, { system, timeZone }) : newDraft({ system, now: new Date(), timeZone })),
+    (draft) => inSystem(draft, system),
+    measurement?.version ?? 0,
+  );
+  const { draft } = kept;
+  const findings = useMemo(
+    () => (draft ? findingsOf(draft, { section: entry.cable.section, span, timeZone, units }) : null),
+    [draft, entry.cable.section, span, timeZone, units],
+  );
+  return { ...kept, findings, timeZone, sensor: sensorShare(draft, row), ...useComparison(survey, row, findings?.outcome?.output ?? null) };
+}
+
+/** Where the peaks should lie, and where those of the sister lie. */
+function useComparison(survey: CampaignDetail, row: ChecklistRow, fitNow: Parameters<typeof expectedFrequencies>[2]['fit']) {
+  const { entry, span } = row;
+  // What is expected may come a moment after the tension: the frame of a keystroke belongs to the estimate.
+  const fit = useDeferredValue(fitNow);
+  const reference = agreedReference(entry.cable, survey)?.meanChordValue ?? null;
+  const last = entry.lastSurvey.find(({ spanId }) => spanId === span.id)?.tension ?? null;
+  const expected = useMemo(
+    () => expectedFrequencies(entry.cable.section, span, { fit, tension: last ?? reference }),
+    [entry.cable.section, span, fit, last, reference],
+  );
+  const sister = useMemo(() => {
+    const found = sisterOf(survey, entry);
+    return found ? { name: found.cable.reference, frequencies: sisterFrequencies(found) } : null;
+  }, [survey, entry]);
+  return { expected, sister };
+}
+
+/** Place of the sensor as a share of the free length from its lower end. */
+function sensorShare(draft: EntryDraft | null, { span }: ChecklistRow): number | null {
+  const position = draft?.visit.sensor.si ?? null;
+  if (position === null) return null;
+  const share = position / freeLength(span).length;
+  return share >= 0 && share <= 1 ? share : null;
+}
