@@ -1,15 +1,23 @@
+import type { ServerResponse } from 'node:http';
 import { toNodeHandler } from 'better-auth/node';
 import express, { type Express, type RequestHandler } from 'express';
 import helmet from 'helmet';
 import { pinoHttp } from 'pino-http';
 import { identityPaths } from './access/auth.ts';
-import { recordSessions } from './access/record-sessions.ts';
+import { describeError, describeRequest } from './create-log.ts';
 import type { AppDeps } from './deps.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { AppError } from './http/errors.ts';
+import { requireOwnOrigin } from './http/own-origin.ts';
 import { registerRoutes } from './http/register-routes.ts';
 import { serveWebApp } from './http/web-app.ts';
 import { routes } from './routes.ts';
+
+const logged = {
+  req: describeRequest,
+  res: ({ statusCode }: ServerResponse) => ({ status: statusCode }),
+  err: describeError,
+};
 
 /** The whole server as one Express application. */
 export function createApp(deps: AppDeps): Express {
@@ -17,10 +25,11 @@ export function createApp(deps: AppDeps): Express {
   const trust = deps.env.TRUST_PROXY;
   app.set('trust proxy', /^\d+$/.test(trust) ? Number(trust) : trust);
   app.disable('x-powered-by');
-  app.use(pinoHttp({ logger: deps.log, redact: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]'] }));
+  app.use(pinoHttp({ logger: deps.log, wrapSerializers: false, serializers: logged }));
   app.use(securityHeaders(deps));
+  app.use('/api', requireOwnOrigin(deps.env));
   // Before express.json(): better-auth reads the body itself.
-  app.all('/api/auth/*splat', onlyIdentityPaths, tellAddress, recordSessions(deps), toNodeHandler(deps.auth));
+  app.all('/api/auth/*splat', onlyIdentityPaths, tellAddress, toNodeHandler(deps.auth));
   app.use('/api/v1', express.json({ limit: '2mb' }), registerRoutes(deps, routes));
   app.use('/api', () => {
     throw new AppError('not-found', 'There is no such address in this API.');

@@ -1,10 +1,13 @@
 import { createDb, type Db } from '@strandnote/db';
 import { sql } from 'drizzle-orm';
-import { type Logger, pino } from 'pino';
+import type { Logger } from 'pino';
 import { createAuth } from './access/auth.ts';
+import { recordIdentityAct } from './access/record-identity-act.ts';
+import { createLog } from './create-log.ts';
 import type { AppDeps } from './deps.ts';
 import type { Env } from './env.ts';
 import { enqueueMail } from './mail/enqueue-mail.ts';
+import { passwordResetMail } from './mail/password-reset-mail.ts';
 import { loadSigningIdentity } from './reports/pdf/signing-identity.ts';
 
 export interface OpenDeps {
@@ -19,7 +22,11 @@ export function createDeps(
 ): OpenDeps {
   const db = createDb(env.DATABASE_URL_APP);
   const identityDb = createDb(env.DATABASE_URL_IDENTITY, { connections: 5 });
-  const auth = createAuth(identityDb, env, { sendPasswordReset: (person, token) => sendPasswordReset(db, env, person, token) });
+  const auth = createAuth(identityDb, env, {
+    log,
+    sendPasswordReset: ({ email }, token) => sendPasswordReset(db, env, email, token),
+    recordAct: (userId, act) => recordIdentityAct({ db, env, clock, log }, userId, act),
+  });
   const deps: AppDeps = { env, db, auth, log, clock, signingIdentity: (firmId) => loadSigningIdentity(env.SIGNING_DIR, firmId) };
   const close = async () => {
     await Promise.all([db.$client.end(), identityDb.$client.end()]);
@@ -27,27 +34,10 @@ export function createDeps(
   return { deps, close };
 }
 
-/** Secrets never reach the log: not the cookie, not a password, not a token in an address. */
-export function createLog({ LOG_LEVEL }: Pick<Env, 'LOG_LEVEL'>): Logger {
-  return pino({
-    level: LOG_LEVEL,
-    redact: {
-      paths: ['req.headers.cookie', 'req.headers.authorization', 'res.headers["set-cookie"]', '*.password', '*.token'],
-      censor: 'kept back',
-    },
-  });
-}
-
-async function sendPasswordReset(db: Db, env: Env, person: { email: string; name: string }, token: string): Promise<void> {
+async function sendPasswordReset(db: Db, env: Env, to: string, token: string): Promise<void> {
   await db.transaction(async (tx) => {
     // No firm is concerned: the job carries none.
     await tx.execute(sql`select set_config('strandnote.firm_id', '', true)`);
-    await enqueueMail(tx, [
-      {
-        to: person.email,
-        subject: 'A new password for Strandnote',
-        text: `Somebody, most likely you, asked for a new password. Choose one within an hour:\n\n${env.publicUrl}/reset-password?token=${token}\n\nIf it was not you, nothing has to be done.`,
-      },
-    ]);
+    await enqueueMail(tx, [passwordResetMail({ to, link: `${env.publicUrl}/reset-password?token=${token}` })]);
   });
 }

@@ -27,6 +27,8 @@ async function main(): Promise<void> {
     // A request that hangs does not keep the process for ever.
     setTimeout(() => process.exit(1), 10_000).unref();
   };
+  // The program that started this one is gone: nobody else would stop it.
+  process.once('disconnect', stop);
   process.once('SIGINT', stop);
   process.once('SIGTERM', stop);
 }

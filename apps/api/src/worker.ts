@@ -1,17 +1,21 @@
+import { assertRolesAreSafe } from '@strandnote/db';
 import { run } from 'graphile-worker';
 import { createDeps } from './create-deps.ts';
 import { readEnv } from './env.ts';
+import { jobLog } from './jobs/job-log.ts';
 import { createTasks } from './jobs/tasks.ts';
 
 /** Runs the jobs: mail and PDFs. Any number of workers may run against one database. */
 async function main(): Promise<void> {
   const env = readEnv();
+  await assertRolesAreSafe(env.DATABASE_URL_APP);
   const { deps, close } = createDeps(env);
   const runner = await run({
     connectionString: env.DATABASE_URL_JOBS,
     concurrency: 2,
     pollInterval: 1000,
     noHandleSignals: true,
+    logger: jobLog(deps.log),
     taskList: createTasks(deps),
   });
   process.send?.('running');
@@ -24,6 +28,7 @@ async function main(): Promise<void> {
         () => process.exit(1),
       );
   };
+  process.once('disconnect', stop);
   process.once('SIGINT', stop);
   process.once('SIGTERM', stop);
   await runner.promise;

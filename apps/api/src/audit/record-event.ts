@@ -9,6 +9,8 @@ export type AuditAct =
   | 'invitation.revoked'
   | 'session.started'
   | 'session.ended'
+  | 'password.changed'
+  | 'password.reset'
   | 'client.created'
   | 'client.changed'
   | 'structure.created'
@@ -53,16 +55,14 @@ export interface AuditSubject {
 
 /**
  * Writes down what was done, as the last thing in its transaction: the head of the firm's chain is locked until commit.
- *
- * @param at when it happened; the database's time where none is given
  */
 export async function recordEvent(
   tx: Tx,
   actor: Pick<Actor, 'firmId' | 'userId' | 'name'>,
   act: AuditAct,
   subject: AuditSubject,
-  details: Record<string, unknown> = {},
-  at: Date = new Date(),
+  details: Record<string, unknown>,
+  at: Date,
 ): Promise<void> {
   await tx.insert(schema.auditEvents).values({
     firmId: actor.firmId,

@@ -5,7 +5,8 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
-import { isSameEntry } from '../http/same-entry.ts';
+import { insertOnce } from '../http/insert-once.ts';
+import { changesOf, isSameEntry } from '../http/same-entry.ts';
 import { loadStructure } from '../structures/structures.queries.ts';
 
 const { cables, sections, spans } = schema;
@@ -15,16 +16,14 @@ export async function createCable(deps: AppDeps, actor: Actor, structureId: stri
   const { spans: given, ...fields } = body;
   await withFirm(deps.db, actor, async (tx) => {
     await loadStructure(tx, structureId);
-    const [stored] = await tx.select().from(cables).where(eq(cables.id, body.id));
-    if (stored) {
-      if (isSameEntry(stored, { ...fields, structureId })) return;
-      throw new AppError('conflict', 'Another cable has this identifier already.');
-    }
     await assertSection(tx, structureId, body.sectionId);
     await assertReferenceIsFree(tx, structureId, body.id, body.reference);
-    await tx.insert(cables).values({ ...fields, firmId: actor.firmId, structureId });
+    const values = { ...fields, firmId: actor.firmId, structureId };
+    if (!(await insertOnce(tx, cables, { values, sent: { ...fields, structureId }, noun: 'cable' }))) {
+      return assertSameSpans(await currentSpans(tx, body.id), given);
+    }
     await writeSpans(tx, actor, body.id, given);
-    await recordEvent(tx, actor, 'cable.created', { kind: 'cable', id: body.id }, { structureId, reference: body.reference });
+    await recordEvent(tx, actor, 'cable.created', { kind: 'cable', id: body.id }, { structureId, reference: body.reference }, deps.clock());
   });
 }
 
@@ -42,13 +41,15 @@ export async function editCable(deps: AppDeps, actor: Actor, cableId: string, bo
     if (changesFields) await tx.update(cables).set(fields).where(eq(cables.id, cableId));
     const changesSpans = given !== undefined && (await replaceSpans(tx, actor, cableId, before, given, deps.clock()));
     if (!changesFields && !changesSpans) return;
-    const from = Object.fromEntries(Object.keys(fields).map((name) => [name, stored[name as keyof typeof stored]]));
+    const { from, to } = changesOf(stored, fields);
+    const spansChanged = changesSpans ? [{ spans: before }, { spans: given }] : [{}, {}];
     await recordEvent(
       tx,
       actor,
       'cable.changed',
       { kind: 'cable', id: cableId },
-      { from: { ...from, ...(changesSpans ? { spans: before } : {}) }, to: body },
+      { from: { ...from, ...spansChanged[0] }, to: { ...to, ...spansChanged[1] } },
+      deps.clock(),
     );
   });
 }
@@ -60,6 +61,12 @@ async function currentSpans(tx: Tx, cableId: string): Promise<SpanRow[]> {
     .select()
     .from(spans)
     .where(and(eq(spans.cableId, cableId), isNull(spans.retiredAt)));
+}
+
+/** @throws AppError `conflict` when a cable that is sent again comes with other spans */
+function assertSameSpans(stored: readonly SpanRow[], given: readonly WriteSpan[]): void {
+  const same = given.every((span, position) => isSameEntry(stored.find(({ id }) => id === span.id) ?? {}, { ...span, position }));
+  if (!same || stored.length !== given.length) throw new AppError('conflict', 'Another cable has this identifier already.');
 }
 
 async function writeSpans(tx: Tx, actor: Actor, cableId: string, given: readonly WriteSpan[]): Promise<void> {

@@ -5,7 +5,7 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
-import { isSameEntry } from '../http/same-entry.ts';
+import { insertOnce } from '../http/insert-once.ts';
 
 const { cables, referenceTensions } = schema;
 
@@ -15,18 +15,15 @@ export async function addReference(deps: AppDeps, actor: Actor, cableId: string,
   await withFirm(deps.db, actor, async (tx) => {
     const [cable] = await tx.select({ id: cables.id }).from(cables).where(eq(cables.id, cableId));
     if (!cable) throw new AppError('not-found', 'There is no such cable.');
-    const [stored] = await tx.select().from(referenceTensions).where(eq(referenceTensions.id, body.id));
-    if (stored) {
-      if (isSameEntry(stored, { ...body, cableId })) return;
-      throw new AppError('conflict', 'Another reference tension has this identifier already.');
-    }
-    await tx.insert(referenceTensions).values({ ...body, firmId: actor.firmId, cableId });
+    const values = { ...body, firmId: actor.firmId, cableId };
+    if (!(await insertOnce(tx, referenceTensions, { values, sent: { ...body, cableId }, noun: 'reference tension' }))) return;
     await recordEvent(
       tx,
       actor,
       'reference.created',
       { kind: 'reference-tension', id: body.id },
       { cableId, kind: body.kind, value: body.value },
+      deps.clock(),
     );
   });
 }
@@ -39,7 +36,14 @@ export async function retireReference(deps: AppDeps, actor: Actor, referenceId: 
     if (!stored) throw new AppError('not-found', 'There is no such reference tension.');
     if (stored.retiredAt !== null) return stored.cableId;
     await tx.update(referenceTensions).set({ retiredAt: deps.clock() }).where(eq(referenceTensions.id, referenceId));
-    await recordEvent(tx, actor, 'reference.retired', { kind: 'reference-tension', id: referenceId }, { cableId: stored.cableId });
+    await recordEvent(
+      tx,
+      actor,
+      'reference.retired',
+      { kind: 'reference-tension', id: referenceId },
+      { cableId: stored.cableId },
+      deps.clock(),
+    );
     return stored.cableId;
   });
 }

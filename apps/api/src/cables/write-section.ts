@@ -5,7 +5,8 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
-import { isSameEntry } from '../http/same-entry.ts';
+import { insertOnce } from '../http/insert-once.ts';
+import { changesOf, isSameEntry } from '../http/same-entry.ts';
 import { loadStructure } from '../structures/structures.queries.ts';
 
 const { sections } = schema;
@@ -14,13 +15,9 @@ export async function createSection(deps: AppDeps, actor: Actor, structureId: st
   assertCan(actor, 'structure.edit');
   await withFirm(deps.db, actor, async (tx) => {
     await loadStructure(tx, structureId);
-    const [stored] = await tx.select().from(sections).where(eq(sections.id, body.id));
-    if (stored) {
-      if (isSameEntry(stored, { ...body, structureId })) return;
-      throw new AppError('conflict', 'Another section has this identifier already.');
-    }
-    await tx.insert(sections).values({ ...body, firmId: actor.firmId, structureId });
-    await recordEvent(tx, actor, 'section.created', { kind: 'section', id: body.id }, { structureId, name: body.name });
+    const values = { ...body, firmId: actor.firmId, structureId };
+    if (!(await insertOnce(tx, sections, { values, sent: { ...body, structureId }, noun: 'section' }))) return;
+    await recordEvent(tx, actor, 'section.created', { kind: 'section', id: body.id }, { structureId, name: body.name }, deps.clock());
   });
 }
 
@@ -34,8 +31,7 @@ export async function editSection(deps: AppDeps, actor: Actor, sectionId: string
       throw AppError.ofField('bendingStiffnessHigh', 'The upper bound must not be below the lower bound.');
     }
     await tx.update(sections).set(body).where(eq(sections.id, sectionId));
-    const from = Object.fromEntries(Object.keys(body).map((name) => [name, stored[name as keyof typeof stored]]));
-    await recordEvent(tx, actor, 'section.changed', { kind: 'section', id: sectionId }, { from, to: body });
+    await recordEvent(tx, actor, 'section.changed', { kind: 'section', id: sectionId }, changesOf(stored, body), deps.clock());
   });
 }
 

@@ -5,20 +5,17 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
-import { isSameEntry } from '../http/same-entry.ts';
+import { insertOnce } from '../http/insert-once.ts';
+import { changesOf, isSameEntry } from '../http/same-entry.ts';
 
 const { clients } = schema;
 
 export async function createClient(deps: AppDeps, actor: Actor, body: CreateClient): Promise<void> {
   assertCan(actor, 'client.edit');
   await withFirm(deps.db, actor, async (tx) => {
-    const [stored] = await tx.select().from(clients).where(eq(clients.id, body.id));
-    if (stored) {
-      if (isSameEntry(stored, body)) return;
-      throw new AppError('conflict', 'Another client has this identifier already.');
-    }
-    await tx.insert(clients).values({ ...body, firmId: actor.firmId });
-    await recordEvent(tx, actor, 'client.created', { kind: 'client', id: body.id }, { name: body.name });
+    const values = { ...body, firmId: actor.firmId };
+    if (!(await insertOnce(tx, clients, { values, sent: body, noun: 'client' }))) return;
+    await recordEvent(tx, actor, 'client.created', { kind: 'client', id: body.id }, { name: body.name }, deps.clock());
   });
 }
 
@@ -29,6 +26,6 @@ export async function editClient(deps: AppDeps, actor: Actor, clientId: string, 
     if (!stored) throw new AppError('not-found', 'There is no such client.');
     if (isSameEntry(stored, body)) return;
     await tx.update(clients).set(body).where(eq(clients.id, clientId));
-    await recordEvent(tx, actor, 'client.changed', { kind: 'client', id: clientId }, { to: body });
+    await recordEvent(tx, actor, 'client.changed', { kind: 'client', id: clientId }, changesOf(stored, body), deps.clock());
   });
 }

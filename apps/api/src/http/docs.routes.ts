@@ -36,7 +36,7 @@ export function docsRoutes(routes: () => readonly Route[]): Route[] {
 function docsPage(routes: readonly Route[]): string {
   const rows = routes.map(
     (route) =>
-      `<tr><td><code>${route.method.toUpperCase()}</code></td><td><code>/api/v1${escape(route.path)}</code></td><td>${escape(route.summary)}</td><td>${escape(route.access)}</td></tr>`,
+      `<tr><td><code>${route.method.toUpperCase()}</code></td><td><code>/api/v1${escapeHtml(route.path)}</code></td><td>${escapeHtml(route.summary)}</td><td>${escapeHtml(route.access)}</td></tr>`,
   );
   return `<!doctype html><html lang="en"><head><meta charset="utf-8"><title>Strandnote API</title>
 <style>body{font:16px/1.5 sans-serif;margin:2rem;max-width:80rem}table{border-collapse:collapse}td,th{text-align:left;padding:.25rem .75rem;border-bottom:1px solid #cfd3cc}</style></head>
@@ -44,6 +44,6 @@ function docsPage(routes: readonly Route[]): string {
 <table><thead><tr><th>Method</th><th>Path</th><th>What it does</th><th>Act</th></tr></thead><tbody>${rows.join('')}</tbody></table></body></html>`;
 }
 
-function escape(text: string): string {
+function escapeHtml(text: string): string {
   return text.replace(/&/g, '&amp;').replace(/</g, '&lt;');
 }

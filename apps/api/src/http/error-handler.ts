@@ -7,6 +7,8 @@ const rulesOfTheDatabase: Record<string, (message: string) => AppError> = {
   SN002: (message) => new AppError('forbidden', message),
   SN003: (message) => new AppError('stale-content', message),
   SN006: (message) => new AppError('conflict', message),
+  '22003': () => new AppError('invalid-input', 'A number is larger than can be stored.'),
+  '23505': () => new AppError('conflict', 'There is one like this already, perhaps made at this very moment. Look again, then try again.'),
   '40001': () => new AppError('conflict', 'Somebody else changed this at the same moment. Try again.'),
   '40P01': () => new AppError('conflict', 'Somebody else changed this at the same moment. Try again.'),
 };
@@ -61,6 +63,8 @@ function asAppError(error: unknown): AppError | null {
   if (rule) return rule(cause?.message ?? (error as Error).message);
   if (type === 'entity.too.large') return new AppError('too-large', 'That is more than the server takes at once.');
   if (type === 'entity.parse.failed') return new AppError('invalid-input', 'The request is not valid JSON.');
-  if (status === 400) return new AppError('invalid-input', 'The request could not be read.');
+  if (status === 404) return new AppError('not-found', 'There is nothing here.');
+  if (error instanceof URIError || (status !== undefined && status >= 400 && status < 500))
+    return new AppError('invalid-input', 'The request could not be read.');
   return null;
 }

@@ -1,6 +1,7 @@
 import type { Actor } from '@strandnote/db';
 import { type Request, type RequestHandler, type Response, Router } from 'express';
 import { rateLimit } from 'express-rate-limit';
+import { z } from 'zod';
 import { currentPerson, type Person } from '../access/current-person.ts';
 import { assertCan } from '../access/permissions.ts';
 import { requireMember } from '../access/require-member.ts';
@@ -9,7 +10,9 @@ import { AppError } from './errors.ts';
 import { parse } from './parse.ts';
 import type { Call, Route } from './route.ts';
 
-/** The routes as an Express router. Every one is parsed, allowed and answered in the same way. */
+const nothing = z.strictObject({});
+
+/** The routes as an Express router. Every one is allowed, parsed and answered in the same way. */
 export function registerRoutes(deps: AppDeps, routes: readonly Route[]): Router {
   const router = Router();
   for (const route of routes) {
@@ -34,24 +37,20 @@ function limiter(perMinute: number): RequestHandler {
 
 function handlerOf(deps: AppDeps, route: Route): RequestHandler {
   return async (request, response) => {
-    if (route.method !== 'get') assertOwnOrigin(deps, request);
     const who = await whoCalls(deps, route, request);
     const params = route.params ? parse(route.params, withoutFirm(request.params)) : undefined;
-    const body = route.body ? parse(route.body, request.body ?? {}) : undefined;
-    const call = { deps, params, body, who, request, response } as Call<never, never, never>;
+    // What a route does not name is refused: a misspelt field would otherwise be lost in silence.
+    const query = parse(route.query ?? nothing, request.query);
+    const body = parse(route.body ?? nothing, request.body ?? {});
+    const call = { deps, params, query, body, who, request, response } as Call<never, never, never, never>;
     const reply = await route.handle(call);
-    if (route.reply === 'file') return;
-    send(response, route, reply);
+    if (route.reply !== 'file') send(response, route, route.reply.parse(reply));
   };
 }
 
-/** The reply is parsed on the way out too: what the contract does not name is not sent. */
-function send(response: Response, route: Route, reply: unknown): void {
-  if (route.reply === 'file') return;
-  response
-    .set('Cache-Control', 'no-store')
-    .status(route.status ?? 200)
-    .json(route.reply.parse(reply));
+/** The reply was parsed on the way out too: what the contract does not name is not sent. */
+function send(response: Response, { status = 200 }: Route, reply: unknown): void {
+  response.set('Cache-Control', 'no-store').status(status).json(reply);
 }
 
 async function whoCalls(deps: AppDeps, route: Route, request: Request): Promise<Actor | Person | null> {
@@ -65,20 +64,4 @@ async function whoCalls(deps: AppDeps, route: Route, request: Request): Promise<
 
 function withoutFirm({ firmId: _firmId, ...rest }: Request['params']): Record<string, unknown> {
   return rest;
-}
-
-/**
- * Requests that change something come from our own pages: browsers say where from, and a page of somebody else's cannot hide it.
- * Programs that send no Origin carry no cookie of a browser either and are let through to the sign-in check.
- */
-function assertOwnOrigin(deps: AppDeps, request: Request): void {
-  const site = request.get('sec-fetch-site');
-  const origin = request.get('origin');
-  const foreign =
-    (site !== undefined && site !== 'same-origin' && site !== 'none') || (origin !== undefined && !isOwn(deps, request, origin));
-  if (foreign) throw new AppError('wrong-origin', 'This request does not come from a page of this server.');
-}
-
-function isOwn(deps: AppDeps, request: Request, origin: string): boolean {
-  return origin === new URL(deps.env.publicUrl).origin || origin === `${request.protocol}://${request.get('host')}`;
 }

@@ -1,6 +1,8 @@
 import { existsSync } from 'node:fs';
 import { join } from 'node:path';
-import express, { type RequestHandler, Router } from 'express';
+import express, { type Request, type RequestHandler, type Response, Router } from 'express';
+
+const forAYear = { immutable: true, maxAge: '1y' } as const;
 
 /**
  * The exported app. Hashed files are kept for a year, and go out as they were compressed at export; a page load of any address
@@ -8,7 +10,7 @@ import express, { type RequestHandler, Router } from 'express';
  */
 export function serveWebApp(root: string): Router {
   const router = Router();
-  const hashed = { immutable: true, maxAge: '1y', fallthrough: false, dotfiles: 'allow' } as const;
+  const hashed = { ...forAYear, fallthrough: false, dotfiles: 'allow' } as const;
   router.use(precompressed(root));
   router.use('/_expo', express.static(join(root, '_expo'), hashed));
   // Fonts lie under a folder that begins with a dot.
@@ -16,7 +18,8 @@ export function serveWebApp(root: string): Router {
   router.use(express.static(root, { index: false, maxAge: 0, dotfiles: 'ignore' }));
   router.get('/{*splat}', (request, response, next) => {
     if (!request.get('accept')?.includes('text/html')) return next();
-    response.set('Cache-Control', 'no-cache').sendFile('index.html', { root });
+    response.set('Cache-Control', 'no-cache');
+    if (!sendCompressed(root, '/index.html', { request, response })) response.sendFile('index.html', { root });
   });
   return router;
 }
@@ -28,22 +31,39 @@ const types: Record<string, string> = {
   svg: 'image/svg+xml',
   ttf: 'font/ttf',
   html: 'text/html',
+  webmanifest: 'application/manifest+json',
 };
 
-/** Sends the .br or .gz beside a file where the browser takes it. */
+/** The better one first, whatever order the browser names them in. */
+const codings = [
+  { name: 'br', suffix: '.br' },
+  { name: 'gzip', suffix: '.gz' },
+];
+
 function precompressed(root: string): RequestHandler {
   return (request, response, next) => {
-    const extension = /\.(\w+)$/.exec(request.path)?.[1] ?? '';
-    if (request.method !== 'GET' || !(extension in types) || request.path.includes('..')) return next();
-    const accepted = request.acceptsEncodings('br', 'gzip');
-    const suffix = accepted === 'br' ? '.br' : accepted === 'gzip' ? '.gz' : null;
-    const compressed = suffix === null ? null : decodeURIComponent(request.path) + suffix;
-    if (compressed === null || !existsSync(join(root, compressed))) return next();
-    response
-      .set('Content-Encoding', accepted as string)
-      .set('Vary', 'Accept-Encoding')
-      .type(types[extension]!);
-    const kept = /^\/(_expo|assets)\//.test(request.path) ? { immutable: true, maxAge: '1y' } : { maxAge: 0 };
-    response.sendFile(compressed, { root, dotfiles: 'allow', ...kept }, (error) => (error ? next(error) : undefined));
+    const path = decoded(request.path);
+    if (path === null || path.includes('..') || (request.method !== 'GET' && request.method !== 'HEAD')) return next();
+    if (!sendCompressed(root, path, { request, response })) next();
   };
+}
+
+function decoded(path: string): string | null {
+  try {
+    return decodeURIComponent(path);
+  } catch {
+    return null;
+  }
+}
+
+/** Sends the .br or .gz beside a file where the browser takes it. @returns whether there was one */
+function sendCompressed(root: string, path: string, { request, response }: { request: Request; response: Response }): boolean {
+  const type = types[/\.(\w+)$/.exec(path)?.[1] ?? ''];
+  const coding = codings.find(({ name, suffix }) => request.acceptsEncodings(name) && existsSync(join(root, path + suffix)));
+  if (!type || !coding) return false;
+  response.set('Content-Encoding', coding.name).set('Vary', 'Accept-Encoding').type(type);
+  const kept = /^\/(_expo|assets)\//.test(path) ? forAYear : { cacheControl: false };
+  if (kept !== forAYear && !response.hasHeader('Cache-Control')) response.set('Cache-Control', 'no-cache');
+  response.sendFile(path + coding.suffix, { root, dotfiles: 'allow', ...kept });
+  return true;
 }

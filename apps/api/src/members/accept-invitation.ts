@@ -51,6 +51,7 @@ export async function acceptInvitation(deps: AppDeps, token: string, { password 
       'member.joined',
       { kind: 'member', id: rows[0].member_id },
       { email: invitation.email, roles: invitation.roles },
+      deps.clock(),
     );
   });
 }
@@ -76,7 +77,10 @@ export async function createAccount(
   password: string,
 ): Promise<string> {
   const context = await deps.auth.$context;
-  const user = await context.internalAdapter.createUser({ name: person.name, email: person.email.toLowerCase(), emailVerified: true }, { method: 'email-password' });
+  const user = await context.internalAdapter.createUser(
+    { name: person.name, email: person.email.toLowerCase(), emailVerified: true },
+    { method: 'email-password' },
+  );
   await context.internalAdapter.linkAccount({
     userId: user.id,
     providerId: 'credential',

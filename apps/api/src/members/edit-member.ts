@@ -5,6 +5,7 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
+import { changesOf, isSameEntry } from '../http/same-entry.ts';
 
 const { clients, invitations, members } = schema;
 
@@ -28,9 +29,9 @@ export async function editMember(deps: AppDeps, actor: Actor, memberId: string, 
       const [client] = await tx.select({ id: clients.id }).from(clients).where(eq(clients.id, body.clientId));
       if (!client) throw AppError.ofField('clientId', 'Choose a client of the firm.');
     }
+    if (isSameEntry(member, body)) return;
     await tx.update(members).set(body).where(eq(members.id, memberId));
-    const { roles, clientId, active } = member;
-    await recordEvent(tx, actor, 'member.changed', { kind: 'member', id: memberId }, { from: { roles, clientId, active }, to: body });
+    await recordEvent(tx, actor, 'member.changed', { kind: 'member', id: memberId }, changesOf(member, body), deps.clock());
   });
 }
 
@@ -38,9 +39,10 @@ export async function editMember(deps: AppDeps, actor: Actor, memberId: string, 
 export async function editMe(deps: AppDeps, actor: Actor, body: EditMe): Promise<void> {
   assertCan(actor, 'member.self');
   await withFirm(deps.db, actor, async (tx) => {
-    if (Object.keys(body).length === 0) return;
-    const [changed] = await tx.update(members).set(body).where(eq(members.userId, actor.userId)).returning({ id: members.id });
-    await recordEvent(tx, actor, 'member.changed', { kind: 'member', id: changed!.id }, { to: body });
+    const [member] = await tx.select().from(members).where(eq(members.userId, actor.userId)).for('update');
+    if (!member || isSameEntry(member, body)) return;
+    await tx.update(members).set(body).where(eq(members.id, member.id));
+    await recordEvent(tx, actor, 'member.changed', { kind: 'member', id: member.id }, changesOf(member, body), deps.clock());
   });
 }
 
@@ -52,6 +54,6 @@ export async function revokeInvitation(deps: AppDeps, actor: Actor, invitationId
     if (invitation.acceptedAt !== null) throw new AppError('conflict', 'The invitation was accepted. Change the member instead.');
     if (invitation.revokedAt !== null) return;
     await tx.update(invitations).set({ revokedAt: deps.clock() }).where(eq(invitations.id, invitationId));
-    await recordEvent(tx, actor, 'invitation.revoked', { kind: 'invitation', id: invitationId }, { email: invitation.email });
+    await recordEvent(tx, actor, 'invitation.revoked', { kind: 'invitation', id: invitationId }, { email: invitation.email }, deps.clock());
   });
 }

@@ -6,7 +6,9 @@ import { assertCan } from '../access/permissions.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { AppError } from '../http/errors.ts';
+import { insertOnce } from '../http/insert-once.ts';
 import { enqueueMail } from '../mail/enqueue-mail.ts';
+import { invitationMail } from '../mail/invitation-mail.ts';
 
 const { clients, firms, invitations, members } = schema;
 const daysToAccept = 14;
@@ -20,11 +22,6 @@ export function hashToken(token: string): string {
 export async function inviteMember(deps: AppDeps, actor: Actor, body: Invite): Promise<void> {
   assertCan(actor, 'member.invite');
   await withFirm(deps.db, actor, async (tx) => {
-    const [stored] = await tx.select().from(invitations).where(eq(invitations.id, body.id));
-    if (stored) {
-      if (stored.email === body.email) return;
-      throw new AppError('conflict', 'Another invitation has this identifier already.');
-    }
     const [member] = await tx
       .select({ id: members.id })
       .from(members)
@@ -36,16 +33,13 @@ export async function inviteMember(deps: AppDeps, actor: Actor, body: Invite): P
     }
     const token = randomBytes(24).toString('base64url');
     const expiresAt = new Date(deps.clock().getTime() + daysToAccept * 24 * 60 * 60 * 1000);
-    await tx
-      .insert(invitations)
-      .values({ ...body, firmId: actor.firmId, tokenSha256: hashToken(token), expiresAt, invitedBy: actor.userId });
+    const values = { ...body, firmId: actor.firmId, tokenSha256: hashToken(token), expiresAt, invitedBy: actor.userId };
+    // A repeated request sends no second message: its token is not the one that the row keeps.
+    if (!(await insertOnce(tx, invitations, { values, sent: body, noun: 'invitation' }))) return;
     const [firm] = await tx.select({ name: firms.name }).from(firms);
+    const link = `${deps.env.publicUrl}/invitation/${token}`;
     await enqueueMail(tx, [
-      {
-        to: body.email,
-        subject: `Invitation to ${firm!.name}`,
-        text: `${actor.name} invites you to ${firm!.name} as ${body.roles.join(', ')}. The invitation holds for ${daysToAccept} days:\n\n${deps.env.publicUrl}/invitation/${token}`,
-      },
+      invitationMail({ to: body.email, from: actor.name, firmName: firm!.name, roles: body.roles, days: daysToAccept, link }),
     ]);
     await recordEvent(
       tx,
@@ -53,6 +47,7 @@ export async function inviteMember(deps: AppDeps, actor: Actor, body: Invite): P
       'member.invited',
       { kind: 'invitation', id: body.id },
       { email: body.email, roles: body.roles, clientId: body.clientId },
+      deps.clock(),
     );
   });
 }

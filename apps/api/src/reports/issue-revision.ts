@@ -2,7 +2,7 @@ import { type Actor, schema, type Tx, withFirm } from '@strandnote/db';
 import { and, eq } from 'drizzle-orm';
 import { assertCan } from '../access/permissions.ts';
 import { verifyPassword } from '../access/verify-password.ts';
-import { appendAnchor } from '../audit/anchor-heads.ts';
+import { anchorHead } from '../audit/anchor-heads.ts';
 import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { loadFile } from '../files/load-file.ts';
@@ -17,7 +17,7 @@ import { signSubmission } from './sign-submission.ts';
 import { issuedStatement, signedRevisionOf } from './statements.ts';
 import { contentOf, loadSubmission } from './submissions.queries.ts';
 
-const { auditHeads, revisions } = schema;
+const { revisions } = schema;
 
 /**
  * The author, or the deputy named by the author, issues an approved revision: the very bytes that were rendered at approval
@@ -26,7 +26,7 @@ const { auditHeads, revisions } = schema;
 export async function issueRevision(deps: AppDeps, actor: Actor, revisionId: string, { password }: { password: string }): Promise<void> {
   assertCan(actor, 'revision.issue');
   await verifyPassword(deps, actor, password);
-  const head = await withFirm(deps.db, actor, async (tx) => {
+  await withFirm(deps.db, actor, async (tx) => {
     const loaded = await lockRevision(tx, revisionId);
     await assertNow(tx, actor, loaded, 'issue');
     const submission = (await loadSubmission(tx, loaded.revision.approvedSubmissionId!))!;
@@ -58,9 +58,8 @@ export async function issueRevision(deps: AppDeps, actor: Actor, revisionId: str
       { contentSha256, sha256: signed.sha256, clientId, superseded },
       at,
     );
-    return loadHead(tx, actor.firmId);
   });
-  await anchor(deps, head, revisionId);
+  await anchorHead(deps, actor);
 }
 
 /** Signs the bytes that were rendered at approval, as they are, and stores what comes out. */
@@ -78,18 +77,4 @@ async function supersedeFormer(tx: Tx, { revision }: LoadedRevision, at: Date): 
     .where(and(eq(revisions.reportId, revision.reportId), eq(revisions.state, 'issued')))
     .returning({ id: revisions.id });
   return former?.id ?? null;
-}
-
-async function loadHead(tx: Tx, firmId: string): Promise<typeof auditHeads.$inferSelect> {
-  const [head] = await tx.select().from(auditHeads).where(eq(auditHeads.firmId, firmId));
-  return head!;
-}
-
-/** The report is issued whether or not the file outside the database can be written; that it could not is told in the log. */
-async function anchor(deps: AppDeps, { firmId, sequence, hash }: typeof auditHeads.$inferSelect, revisionId: string): Promise<void> {
-  try {
-    await appendAnchor(deps.env.ANCHOR_FILE, { firmId, sequence, hash, at: deps.clock().toISOString() });
-  } catch (error) {
-    deps.log.error({ err: error, revisionId, sequence, hash }, 'the head of the audit chain could not be anchored');
-  }
 }

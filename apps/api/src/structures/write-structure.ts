@@ -6,7 +6,8 @@ import { recordEvent } from '../audit/record-event.ts';
 import type { AppDeps } from '../deps.ts';
 import { assertTimeZone } from '../firms/edit-firm.ts';
 import { AppError } from '../http/errors.ts';
-import { isSameEntry } from '../http/same-entry.ts';
+import { insertOnce } from '../http/insert-once.ts';
+import { changesOf, isSameEntry } from '../http/same-entry.ts';
 
 const { clients, structures } = schema;
 
@@ -14,14 +15,10 @@ export async function createStructure(deps: AppDeps, actor: Actor, body: CreateS
   assertCan(actor, 'structure.edit');
   assertTimeZone(body.timeZone);
   await withFirm(deps.db, actor, async (tx) => {
-    const [stored] = await tx.select().from(structures).where(eq(structures.id, body.id));
-    if (stored) {
-      if (isSameEntry(stored, body)) return;
-      throw new AppError('conflict', 'Another structure has this identifier already.');
-    }
     await assertClient(tx, body.clientId);
-    await tx.insert(structures).values({ ...body, firmId: actor.firmId });
-    await recordEvent(tx, actor, 'structure.created', { kind: 'structure', id: body.id }, { name: body.name });
+    const values = { ...body, firmId: actor.firmId };
+    if (!(await insertOnce(tx, structures, { values, sent: body, noun: 'structure' }))) return;
+    await recordEvent(tx, actor, 'structure.created', { kind: 'structure', id: body.id }, { name: body.name }, deps.clock());
   });
 }
 
@@ -34,7 +31,7 @@ export async function editStructure(deps: AppDeps, actor: Actor, structureId: st
     if (isSameEntry(stored, body)) return;
     await assertClient(tx, body.clientId ?? null);
     await tx.update(structures).set(body).where(eq(structures.id, structureId));
-    await recordEvent(tx, actor, 'structure.changed', { kind: 'structure', id: structureId }, { to: body });
+    await recordEvent(tx, actor, 'structure.changed', { kind: 'structure', id: structureId }, changesOf(stored, body), deps.clock());
   });
 }
 
