@@ -64,6 +64,17 @@ export interface ModalPeak {
   plane?: 'in-plane' | 'out-of-plane';
 }
 
+/**
+ * From the thinnest wire in a laboratory to more than any structure holds (m, kg/m, N·m², Hz): beyond, it is a typing error,
+ * and the arithmetic stays far from its limits.
+ */
+const physical = {
+  length: [0.01, 1e5],
+  massPerLength: [1e-6, 1e6],
+  bendingStiffness: [1e-9, 1e12],
+  frequency: [1e-4, 1e6],
+} as const;
+
 /** Highest mode number taken: beyond it a number is a typing error, and the work of a fit stays bounded. */
 export const highestMode = 200;
 
@@ -74,9 +85,12 @@ export const highestMode = 200;
  * @throws EstimationError `not-finite`, `out-of-range`, `missing`, `attachment-outside`, naming the field
  */
 export function checkCable(cable: Cable): void {
-  assertRange(cable.length, 'length', 0, 1e5, true);
-  assertRange(cable.massPerLength, 'massPerLength', 0, 1e6, true);
-  if (cable.bendingStiffness !== undefined) assertRange(cable.bendingStiffness, 'bendingStiffness', 0, 1e15);
+  assertRange(cable.length, 'length', physical.length[0], physical.length[1]);
+  assertRange(cable.massPerLength, 'massPerLength', physical.massPerLength[0], physical.massPerLength[1]);
+  // 0 is an answer: a string.
+  if (cable.bendingStiffness !== undefined && cable.bendingStiffness !== 0) {
+    assertRange(cable.bendingStiffness, 'bendingStiffness', physical.bendingStiffness[0], physical.bendingStiffness[1]);
+  }
   if (cable.bendingStiffnessBounds !== undefined) checkBounds(cable.bendingStiffnessBounds);
   if (cable.axialStiffness !== undefined) assertRange(cable.axialStiffness, 'axialStiffness', 0, 1e18, true);
   if (cable.inclination !== undefined) assertRange(cable.inclination, 'inclination', -Math.PI / 2, Math.PI / 2);
@@ -100,8 +114,8 @@ export function checkCable(cable: Cable): void {
 function checkBounds(bounds: [number, number]): void {
   const field = 'bendingStiffnessBounds';
   if (!Array.isArray(bounds) || bounds.length !== 2) throw new EstimationError('missing', field, 'Bending stiffness needs two bounds.');
-  assertRange(bounds[0], `${field}[0]`, 0, 1e15, true);
-  assertRange(bounds[1], `${field}[1]`, 0, 1e15, true);
+  for (const index of [0, 1] as const)
+    assertRange(bounds[index], `${field}[${index}]`, physical.bendingStiffness[0], physical.bendingStiffness[1]);
   if (bounds[1] < bounds[0]) {
     throw new EstimationError('out-of-range', field, 'The upper bound of bending stiffness must not lie below the lower one.');
   }
@@ -158,9 +172,9 @@ export function checkPeaks(peaks: readonly ModalPeak[]): void {
         `A mode number is a whole number from 1 to ${highestMode}, and this is ${peak.mode}.`,
       );
     }
-    assertRange(peak.frequency, `peaks[${index}].frequency`, 0, 1e6, true);
+    assertRange(peak.frequency, `peaks[${index}].frequency`, physical.frequency[0], physical.frequency[1]);
     if (peak.standardUncertainty !== undefined) {
-      assertRange(peak.standardUncertainty, `peaks[${index}].standardUncertainty`, 0, peak.frequency, true);
+      assertRange(peak.standardUncertainty, `peaks[${index}].standardUncertainty`, 1e-9 * peak.frequency, peak.frequency);
     }
   });
   checkOrder(peaks, 'in-plane');

@@ -5,15 +5,16 @@
  * be told apart, and choosing an η hides an error larger than everything else. So the fit runs at every node of a quadrature
  * (./fixity-nodes), each node weighted by its evidence (Laplace)
  *
- *   w ∝ p(η) p(EI) exp(−χ²/2) |C|^{1/2}
+ *   w ∝ p(η) p(EI) exp(−χ²/2) |C|^{1/2} T
  *
- * and the answer is the mixture. Bending stiffness is fitted in the node where a log-normal prior and the frequencies
+ * (C is that of ln T, and all tensions are equally probable beforehand: equally probable logarithms would favour T → 0 where
+ * bending explains nearly everything) and the answer is the mixture. Bending stiffness is fitted in the node where a log-normal prior and the frequencies
  * determine it (ln sd ≤ 0.2); otherwise it is integrated over too. The change of the answer with an input p follows by
  * implicit differentiation: within a node δt = −[C Jᵀ W ∂ln f/∂p]_t, and through the weights Cov(t, Σ W r ∂ln f/∂p).
  *
  * Sources: JCGM 100:2008 and 101:2008 for the propagation; the mixture is the product's own, calibrated by simulation.
  */
-import type { FitProblem } from './fit-problem.ts';
+import { type FitProblem, stringTension } from './fit-problem.ts';
 import { type FixityNode, gaussLegendre } from './fixity-nodes.ts';
 import { truncatedNormal } from './mixture.ts';
 import { fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace, type StiffnessFreedom } from './node-fit.ts';
@@ -69,7 +70,7 @@ export function fitFixity(
       components.push(plan.kind === 'fitted' && plan.bounds !== null ? cutToBounds(whole, plan.bounds) : whole);
     }
     const begun = components[first]!.fit;
-    start = { logTension: begun.logTension, logStiffness: begun.logStiffness };
+    if (Number.isFinite(begun.logTension)) start = { logTension: begun.logTension, logStiffness: begun.logStiffness };
   });
   return components;
 }
@@ -128,7 +129,9 @@ function component(
   return {
     node,
     group,
-    logWeight: logShare - fit.objective / 2 + 0.5 * Math.log(determinant),
+    logWeight: carriesTension(problem, fit)
+      ? logShare - fit.objective / 2 + 0.5 * Math.log(determinant) + fit.logTension
+      : Number.NEGATIVE_INFINITY,
     fit,
     frequencyVariance: free ? ctt * ctt * tt + 2 * ctt * cte * te + cte * cte * ee : ctt,
     priorVariance: free ? cte * cte * freedom.weight : 0,
@@ -163,6 +166,15 @@ function cutToBounds(whole: PosteriorNode, [low, high]: [number, number]): Poste
       varianceStiffness: fit.varianceStiffness * cut.variance,
     },
   };
+}
+
+/** Below this share of the string tension bending alone makes the frequencies, and ln T has no end. */
+const slackestShare = 1e-3;
+
+/** Whether a node was fitted at all: where bending explains more than the frequencies, T runs to nothing and its variance away. */
+function carriesTension(problem: FitProblem, fit: NodeFit): boolean {
+  const floor = Math.log(slackestShare * stringTension(problem.length, problem.massPerLength, problem.peaks));
+  return fit.converged && fit.logTension > floor && fit.varianceTension > 0 && fit.varianceTension < 25 && Number.isFinite(fit.objective);
 }
 
 /** −[C Jᵀ W ∂ln f/∂p]_t and Σ W r ∂ln f/∂p. */

@@ -39,18 +39,24 @@ export function estimateTension(cable: Cable, peaks: readonly ModalPeak[], optio
   const correction = modelCorrection(problem);
   const settled = settleNoise(problem, scoutEnds(cable), work, correction);
   const shifts = lengthShifts(cable, options);
-  const components = fitFixity(
-    settled.problem,
-    fixityNodes(settled.problem.ends, isSharp(settled), isSymmetric(cable)),
-    settled.plan,
-    work,
-    correction,
-  );
-  const posterior = assemblePosterior(settled.problem, components, shifts);
-  if (!Number.isFinite(posterior.logTension) || !Number.isFinite(posterior.variance)) {
-    throw new EstimationError('not-converged', 'peaks', 'No tension fits these frequencies on this cable.');
-  }
+  const nodes = fixityNodes(settled.problem.ends, isSharp(settled), isSymmetric(cable));
+  const components = fitFixity(settled.problem, nodes, settled.plan, work, correction);
+  const fitted = components.filter(({ logWeight }) => Number.isFinite(logWeight));
+  if (fitted.length === 0) throw notFitted();
+  const posterior = assemblePosterior(settled.problem, fitted, shifts);
+  if (!(posterior.variance < widestVariance)) throw notFitted();
   return describe({ settled, posterior, shifts, options, work, correction });
+}
+
+/** Variance of ln T beyond which nothing is known of the tension. */
+const widestVariance = 4;
+
+function notFitted(): EstimationError {
+  return new EstimationError(
+    'not-converged',
+    'peaks',
+    'No tension fits these frequencies on this cable: its bending stiffness alone explains them, or more. Check length, mass and bending stiffness.',
+  );
 }
 
 function checkOptions(options: EstimateOptions): void {
@@ -119,7 +125,7 @@ function describe(fitted: FittedCable): TensionEstimate {
     interval68: [at(0.16), at(0.84)],
     expanded: { U, k: standardUncertainty > 0 ? U / standardUncertainty : 0, coverage: 0.95 },
     bendingStiffness: describeStiffness(problem, posterior),
-    bracket: { hinged: Math.exp(bracket.hinged.logTension), clamped: Math.exp(bracket.clamped.logTension) },
+    bracket: { hinged: tensionOf(bracket.hinged), clamped: tensionOf(bracket.clamped) },
     models: modelTable(problem, posterior, bracket, stiffnessIsFitted(problem, settled.plan) ? 2 : 1, work, correction),
     budget,
     residuals,
@@ -134,10 +140,18 @@ function describe(fitted: FittedCable): TensionEstimate {
   };
 }
 
-/** The same fit with both ends of one kind: posterior mean over bending stiffness. */
-function bracketFit({ settled, work, correction }: FittedCable, end: EndNode): BracketFit {
+/** Nothing where ends of this kind leave no tension to carry. */
+function tensionOf(fit: BracketFit | null): number {
+  return fit === null ? 0 : Math.exp(fit.logTension);
+}
+
+/** The same fit with both ends of one kind: posterior mean over bending stiffness; null where no tension fits. */
+function bracketFit({ settled, work, correction }: FittedCable, end: EndNode): BracketFit | null {
   const node: FixityNode = { first: end, second: end, prior: 1, mirrored: false };
-  const components = fitFixity(settled.problem, [node], settled.plan, work, correction);
+  const components = fitFixity(settled.problem, [node], settled.plan, work, correction).filter(({ logWeight }) =>
+    Number.isFinite(logWeight),
+  );
+  if (components.length === 0) return null;
   const weights = normalisedWeights(components);
   const mean = (value: (fit: (typeof components)[number]['fit']) => number) =>
     components.reduce((sum, { fit }, i) => sum + weights[i]! * value(fit), 0);

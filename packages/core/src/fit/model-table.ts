@@ -75,23 +75,27 @@ const clampedEnd: EndNode = { fixity: 1, stiffness: null };
 export function modelTable(
   problem: FitProblem,
   posterior: Posterior,
-  bracket: { hinged: BracketFit; clamped: BracketFit },
+  bracket: { hinged: BracketFit | null; clamped: BracketFit | null },
   fittedParameters: number,
   work: NodeWorkspace,
   correction: ModelCorrection | null,
 ): ModelRow[] {
-  const rung = (id: string, name: string, end: EndNode, fit: BracketFit, note: string) =>
-    modelRow(
-      { id, name, tension: Math.exp(fit.logTension), bendingStiffness: Math.exp(fit.logStiffness), note },
-      modelResiduals(problem, [end, end], fit, work, correction),
-      fittedParameters,
-    );
+  const rung = (id: string, name: string, end: EndNode, fit: BracketFit | null, note: string) =>
+    fit === null
+      ? []
+      : [
+          modelRow(
+            { id, name, tension: Math.exp(fit.logTension), bendingStiffness: Math.exp(fit.logStiffness), note },
+            modelResiduals(problem, [end, end], fit, work, correction),
+            fittedParameters,
+          ),
+        ];
   const { fit, node } = posterior.mode;
   return [
     stringRow(problem),
     ...hingedLineRow(problem),
-    rung('hinged', 'Stiff string, both ends hinged', hingedEnd, bracket.hinged, 'Upper end of the bracket.'),
-    rung('clamped', 'Stiff string, both ends clamped', clampedEnd, bracket.clamped, 'Lower end of the bracket.'),
+    ...rung('hinged', 'Stiff string, both ends hinged', hingedEnd, bracket.hinged, 'Upper end of the bracket.'),
+    ...rung('clamped', 'Stiff string, both ends clamped', clampedEnd, bracket.clamped, 'Lower end of the bracket.'),
     modelRow(
       {
         id: 'adopted',

@@ -123,8 +123,9 @@ export function fitNode(
   return {
     logTension: t + stepT,
     logStiffness: e + stepE,
-    chiSquared: best.chiSquared,
-    objective: best.objective,
+    // The last step is taken without another look: what it gains is known from the quadratic model.
+    chiSquared: Math.max(0, best.chiSquared - (converged ? best.gain : 0)),
+    objective: Math.max(0, best.objective - (converged ? best.gain : 0)),
     varianceTension: best.varianceTension,
     covariance: best.covariance,
     varianceStiffness: best.varianceStiffness,
@@ -146,6 +147,8 @@ interface Quadratic {
   covariance: number;
   varianceStiffness: number;
   valley: number;
+  /** What the whole step takes from the objective. */
+  gain: number;
 }
 
 /** χ² here and the step to the minimum of its quadratic model. */
@@ -180,21 +183,25 @@ function quadratic(problem: FitProblem, work: NodeWorkspace, freedom: StiffnessF
       covariance: 0,
       varianceStiffness: 0,
       valley: -te / tt,
+      gain: (gt * gt) / tt,
     };
   }
   ee += freedom.weight;
   ge -= freedom.weight * (e - freedom.mean);
   // One peak cannot tell both: a whisper of a prior keeps the system regular without moving it.
   const determinant = Math.max(tt * ee - te * te, 1e-12 * tt * ee);
+  const stepT = (ee * gt - te * ge) / determinant;
+  const stepE = (tt * ge - te * gt) / determinant;
   return {
     chiSquared,
     objective: chiSquared + freedom.weight * (e - freedom.mean) ** 2,
-    stepT: (ee * gt - te * ge) / determinant,
-    stepE: (tt * ge - te * gt) / determinant,
+    stepT,
+    stepE,
     varianceTension: ee / determinant,
     covariance: -te / determinant,
     varianceStiffness: tt / determinant,
     valley: -te / tt,
+    gain: gt * stepT + ge * stepE,
   };
 }
 

@@ -90,7 +90,7 @@ export function assemblePosterior(problem: FitProblem, components: readonly Post
   const moments = mixtureMoments(mixture);
   const logStiffness = average(({ fit }) => fit.logStiffness);
   return {
-    logTension: moments.mean,
+    logTension: logMeanTension(mixture, moments.mean),
     variance: moments.variance,
     quantile: (probability) => mixtureQuantile(mixture, probability),
     parts: {
@@ -106,6 +106,19 @@ export function assemblePosterior(problem: FitProblem, components: readonly Post
     fixity: [endFixity(components, weights, 'first'), endFixity(components, weights, 'second')],
     mode: components.reduce((best, c) => (c.logWeight - Math.log(c.node.prior) > best.logWeight - Math.log(best.node.prior) ? c : best)),
   };
+}
+
+/**
+ * ln of the mean tension over the nodes. Where the nodes lie within some per cent this is their mean of ln T; where bending
+ * explains nearly everything on some of them, it is not drawn down by logarithms that run to nothing.
+ */
+function logMeanTension({ weights, means }: NormalMixture, near: number): number {
+  let [total, sum] = [0, 0];
+  for (let i = 0; i < weights.length; i++) {
+    total += weights[i]!;
+    sum += weights[i]! * Math.exp(means[i]! - near);
+  }
+  return near + Math.log(sum / total);
 }
 
 /** Variance of the node means: between fixities, and within one fixity between values of bending stiffness. */

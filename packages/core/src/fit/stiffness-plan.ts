@@ -134,6 +134,7 @@ function locateRange(
   }
   // Flat evidence needs few nodes. At one fixity the evidence may be much sharper than over all of them: the nodes keep up.
   const smooth = relief < 3 ? 5 : 8;
-  const nodes = Math.max(smooth, Math.min(24, Math.ceil((range[1] - range[0]) / (1.3 * sharpest)) + 2));
+  const needed = Math.ceil((range[1] - range[0]) / (1.3 * sharpest)) + 2;
+  const nodes = Number.isFinite(needed) ? Math.max(smooth, Math.min(24, needed)) : smooth;
   return { kind: 'integrated', range, nodes, start: best, lowestChiSquared: best.chiSquared, spread: (range[1] - range[0]) / 6 };
 }

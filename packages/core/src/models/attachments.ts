@@ -107,13 +107,18 @@ function isolate(assembly: Assembly, n: number, from: number, to: number): numbe
   return (low + high) / 2;
 }
 
+/** Shares of the length that are no distance. */
+const endRoom = 1e-6;
+
 function assemble(cable: AttachedCable): Assembly {
-  const sorted = [...cable.attachments].sort((a, b) => a.position - b.position);
+  // What sits on an end does not move.
+  const inside = ({ position }: LumpedAttachment) => position > endRoom * cable.length && position < (1 - endRoom) * cable.length;
+  const sorted = cable.attachments.filter(inside).sort((a, b) => a.position - b.position);
   const joints: LumpedAttachment[] = [];
   for (const { position, mass, stiffness } of sorted) {
     const last = joints.at(-1);
     // Two things at one place are one: a piece of no length has no stiffness.
-    if (last && position - last.position < 1e-9 * cable.length) {
+    if (last && position - last.position < endRoom * cable.length) {
       last.mass += mass;
       last.stiffness += stiffness;
     } else joints.push({ position, mass, stiffness });

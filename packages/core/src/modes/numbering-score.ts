@@ -67,7 +67,7 @@ export function scoreNumbering(problem: NumberingProblem, candidate: Candidate):
   if (named === 0) return Number.NEGATIVE_INFINITY;
   const top = frequencies[frequencies.length - 1]!;
   // A foreign peak may stand above the last mode: modes up to there could have been seen.
-  const visible = Math.max(highest, Math.floor(modeAt(top, candidate.fundamental, candidate.curvature) + 0.02));
+  const visible = Math.max(highest, Math.min(mostVisible, Math.floor(modeAt(top, candidate.fundamental, candidate.curvature) + 0.02)));
   const foreign = (modes.length - named) * Math.log(foreignRate / (1.05 * top));
   return Math.log(marginal(problem, candidate, named)) + logDensity + foreign + Math.log(detection(modes, named, visible));
 }
@@ -124,6 +124,8 @@ function atCurvature({ logs, noise, prior }: NumberingProblem, modes: Int16Array
   return total;
 }
 
+/** No survey shows more modes than this; the bound keeps the count below short. */
+const mostVisible = 400;
 const modeLogs = Float64Array.from({ length: 201 }, (_, n) => Math.log(Math.max(1, n)));
 
 function fundamentalDensity(prior: NumberingProblem['prior'], mean: number, deviation: number): number {
