@@ -1,5 +1,5 @@
-import { memo } from 'react';
-import { View } from 'react-native';
+import { memo, useEffect, useRef } from 'react';
+import { View, type ViewStyle } from 'react-native';
 import { Panel, Row, Stack, Text, Touchable } from '../../ui/index.ts';
 import type { ChecklistRow } from './checklist-rows.ts';
 import { RowFigures, RowState } from './row-state.tsx';
@@ -12,8 +12,16 @@ interface CableListProps {
 
 /** The checklist beside the cable that is open, on a wide screen. */
 export const CableList = memo(function CableList({ rows, currentKey, hrefOf }: CableListProps) {
+  const list = useRef<View>(null);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: the current row is what it answers to
+  useEffect(() => {
+    const element = list.current as unknown as HTMLElement | null;
+    const current = element?.querySelector<HTMLElement>(`[aria-current]`);
+    // Not scrollIntoView: that would move the page as well.
+    if (element && current) element.scrollTop = current.offsetTop - element.clientHeight / 2;
+  }, [currentKey]);
   return (
-    <View role="navigation" aria-label="Cables of the campaign" style={{ maxHeight: '80vh' as never, overflowY: 'auto' as never }}>
+    <View ref={list} role="navigation" aria-label="Cables of the campaign" style={staysInSight}>
       <Panel gap={0}>
         {rows.map((row) => (
           <Touchable key={row.key} href={hrefOf(row)} label={`Cable ${row.name}, ${row.state}`} current={row.key === currentKey}>
@@ -32,3 +40,5 @@ export const CableList = memo(function CableList({ rows, currentKey, hrefOf }: C
     </View>
   );
 });
+
+const staysInSight = { position: 'sticky', top: 16, maxHeight: 'calc(100vh - 32px)', overflowY: 'auto' } as unknown as ViewStyle;

@@ -118,16 +118,18 @@ function placeBetween(below: PeakDraft | undefined, above: PeakDraft | undefined
   return below ? `above ${name(below)}` : `below ${name(above!)}`;
 }
 
-function longestRise(rows: readonly PeakDraft[]): PeakDraft[] {
-  const best: PeakDraft[][] = [];
-  for (const [index, row] of rows.entries()) {
-    const before = rows
-      .slice(0, index)
-      .map((other, at) => (other.frequency.si! < row.frequency.si! ? best[at]! : []))
-      .reduce<PeakDraft[]>((longest, candidate) => (candidate.length > longest.length ? candidate : longest), []);
-    best.push([...before, row]);
+/** The longest rising row of frequencies; of two as long, the one whose f/n are more alike, as those of a cable are. */
+function longestRise(sorted: readonly PeakDraft[]): PeakDraft[] {
+  const perMode = sorted.map((row) => Math.log(row.frequency.si! / modeOf(row)!));
+  const typical = perMode.toSorted((a, b) => a - b)[Math.floor(perMode.length / 2)] ?? 0;
+  const best: { rows: PeakDraft[]; strangeness: number }[] = [];
+  const better = (a: (typeof best)[number], b: (typeof best)[number]) =>
+    b.rows.length > a.rows.length || (b.rows.length === a.rows.length && b.strangeness < a.strangeness) ? b : a;
+  for (const [index, row] of sorted.entries()) {
+    const before = best.filter((_, at) => sorted[at]!.frequency.si! < row.frequency.si!).reduce(better, { rows: [], strangeness: 0 });
+    best.push({ rows: [...before.rows, row], strangeness: before.strangeness + Math.abs(perMode[index]! - typical) });
   }
-  return best.reduce<PeakDraft[]>((longest, candidate) => (candidate.length > longest.length ? candidate : longest), []);
+  return best.reduce(better, { rows: [], strangeness: 0 }).rows;
 }
 
 function checkVisit(

@@ -1,6 +1,7 @@
 import type { CampaignDetail } from '@strandnote/api/contract';
 import { type IntervalScale, sharedScale, shareOfReference } from '@strandnote/core/drawing';
 import { memo, useMemo } from 'react';
+import { View } from 'react-native';
 import { IntervalBar } from '../../drawings/index.ts';
 import { type Units, useUnits } from '../../lib/units.tsx';
 import { type Column, DataTable, Panel, Row, Rule, Stack, Tag, Text, Touchable, useWide } from '../../ui/index.ts';
@@ -70,10 +71,18 @@ const PhoneRow = memo(function PhoneRow({ row, href, drafted, bars }: { row: Che
             ) : null}
             {drafted ? <Tag tone="ochre">typed, not saved</Tag> : null}
           </Row>
-          <RowFigures row={row} />
+          {row.output ? <RowFigures row={row} /> : <RowState row={row} size="note" />}
         </Row>
-        {bar ? <IntervalBar values={bar} scale={bars.scale} height={24} /> : null}
-        <RowState row={row} size="note" />
+        {bar ? (
+          <Row gap={3} wrap={false}>
+            <View style={{ flex: 1, minWidth: 0 }}>
+              <IntervalBar values={bar} scale={bars.scale} height={26} />
+            </View>
+            <View style={{ width: 92 }}>
+              <RowState row={row} size="note" />
+            </View>
+          </Row>
+        ) : null}
       </Stack>
     </Touchable>
   );
@@ -93,7 +102,7 @@ function wideColumns({
 }: Pick<ChecklistListProps, 'survey' | 'drafted'> & { bars: Bars; units: Units }): Column<ChecklistRow>[] {
   const figures = { figures: true, align: 'right' } as const;
   return [
-    { key: 'cable', header: 'Cable', cell: (row) => row.name, figures: true, sortBy: (row) => row.name },
+    { key: 'cable', header: 'Cable', cell: (row) => row.name, figures: true, align: 'left', sortBy: (row) => row.name },
     {
       key: 'mark',
       header: 'Painted mark',

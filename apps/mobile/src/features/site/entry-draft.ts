@@ -43,7 +43,7 @@ export type EntryAction =
   | { type: 'peakAdded' }
   | { type: 'peakRemoved'; id: string }
   | { type: 'columnPasted'; id: string; frequencies: string[] }
-  | { type: 'peaksRenumbered'; modes: Record<string, number> }
+  | { type: 'peaksRenumbered'; modes: Record<string, number | null> }
   | { type: 'visitAnswered'; change: Partial<VisitDraft> };
 
 /** Six modes are a good day's reading; rows left empty are not saved. */
@@ -127,11 +127,17 @@ export function reduceDraft(draft: EntryDraft, action: EntryAction): EntryDraft 
     case 'peaksRenumbered':
       return {
         ...draft,
-        peaks: draft.peaks.map((peak) => (peak.id in action.modes ? { ...peak, mode: String(action.modes[peak.id]) } : peak)),
+        peaks: draft.peaks.map((peak) => renumbered(peak, action.modes[peak.id])),
       };
     case 'visitAnswered':
       return { ...draft, visit: { ...draft.visit, ...action.change } };
   }
+}
+
+/** A foreign peak keeps its number and is set aside. */
+function renumbered(peak: PeakDraft, mode: number | null | undefined): PeakDraft {
+  if (mode === undefined) return peak;
+  return mode === null ? { ...peak, used: false, setAsideReason: 'foreign peak' } : { ...peak, mode: String(mode) };
 }
 
 /** The answers that are alike from cable to cable on a day; the person says so with one touch. */

@@ -34,7 +34,10 @@ export function findingsOf(draft: EntryDraft, { section, span, timeZone, units }
     upperDamperState: upperDamper ?? 'none',
     crossTied: crossTied === 'yes',
   } as const;
+  const started = performance.now();
   const outcome = peaks.length === 0 ? null : estimateSpan(section, span, visit, peaks);
+  // Read by whoever measures how long a keystroke waits for the tension.
+  if (outcome) performance.measure('strandnote.estimate', { start: started, end: performance.now() });
   const questions = questionsOf(draft, section, span, units);
   const fitNotes = outcome?.output?.warnings ?? [];
   return {

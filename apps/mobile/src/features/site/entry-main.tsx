@@ -39,6 +39,7 @@ export function EntryMain(props: EntryMainProps) {
       draft={draft}
       findings={findings}
       expected={entry.expected}
+      numbering={entry.numbering}
       sister={entry.sister}
       sensor={entry.sensor}
       strict={saving.tried}
@@ -53,6 +54,20 @@ export function EntryMain(props: EntryMainProps) {
       before={latestOther(props.rows, row)}
       dispatch={dispatch}
     />
+  );
+  const tension = (
+    <>
+      <StaysInSight>
+        <ResultPanel {...result} />
+      </StaysInSight>
+      <ResultNotes {...result} />
+    </>
+  );
+  const foot = (
+    <>
+      <Caution unchecked site conditions={conditionsOf(row, draft, survey.steelTemperature, units)} />
+      <EntryLinks {...props} onExcuse={() => setExcusing(true)} />
+    </>
   );
   return (
     <Stack gap={4}>
@@ -70,26 +85,24 @@ export function EntryMain(props: EntryMainProps) {
       {wide ? (
         <Columns shares={[6, 5]}>
           {[
-            peaks,
+            <Stack key="peaks" gap={4}>
+              {peaks}
+              {foot}
+            </Stack>,
             <Stack key="result" gap={4}>
-              <ResultPanel {...result} />
-              <ResultNotes {...result} />
+              {tension}
               {visit}
             </Stack>,
           ]}
         </Columns>
       ) : (
         <>
-          <StaysInSight>
-            <ResultPanel {...result} />
-          </StaysInSight>
-          <ResultNotes {...result} />
+          {tension}
           {peaks}
           {visit}
+          {foot}
         </>
       )}
-      <Caution unchecked site conditions={conditionsOf(row, draft, survey.steelTemperature, units)} />
-      <EntryLinks {...props} onExcuse={() => setExcusing(true)} />
       {excusing ? (
         <NotMeasuredSheet row={row} campaignId={survey.id} onClose={() => setExcusing(false)} onSaved={() => setExcusing(false)} />
       ) : null}
@@ -97,7 +110,7 @@ export function EntryMain(props: EntryMainProps) {
   );
 }
 
-/** On a phone the tension stays at the top while the peaks below it are typed. */
+/** The tension stays at the top while the peaks below or beside it are typed. */
 function StaysInSight({ children }: { children: ReactNode }) {
   const { paper } = useColours();
   const style = { position: 'sticky', top: 0, zIndex: 1, backgroundColor: paper, paddingVertical: space(2), marginVertical: -space(2) };

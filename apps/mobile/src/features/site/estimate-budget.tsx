@@ -9,6 +9,9 @@ export function EstimateBudget({ output }: { output: StoredEstimate }) {
   return (
     <Panel>
       <Heading level={2}>Where the uncertainty comes from</Heading>
+      <Text size="note" tone="muted">
+        Standard uncertainty that each source adds to the tension, and its share of the variance.
+      </Text>
       <Stack gap={3}>
         {output.budget.map((line) => (
           <BudgetBar key={line.source} line={line} />
@@ -16,6 +19,10 @@ export function EstimateBudget({ output }: { output: StoredEstimate }) {
       </Stack>
     </Panel>
   );
+}
+
+function contributionWords(contribution: number): string {
+  return contribution < 5e-5 ? 'under 0.01 %' : `${formatNumber(100 * contribution, 2)} %`;
 }
 
 function BudgetBar({ line }: { line: StoredEstimate['budget'][number] }) {
@@ -30,7 +37,7 @@ function BudgetBar({ line }: { line: StoredEstimate['budget'][number] }) {
     <Stack gap={1}>
       <Row justify="space-between" gap={3}>
         <Text>{line.label}</Text>
-        <Text figures>{`${formatNumber(100 * line.contribution, 2)} % of the tension`}</Text>
+        <Text figures>{contributionWords(line.contribution)}</Text>
       </Row>
       <View aria-hidden style={{ height: 8, backgroundColor: colours.line }}>
         <View style={{ height: 8, width: `${100 * share}%`, backgroundColor: colours.verdigris }} />

@@ -53,7 +53,7 @@ export function EstimateHistory({ survey, row }: { survey: CampaignDetail; row: 
 }
 
 const columns: Column<HistoryRow>[] = [
-  { key: 'when', header: 'When', cell: ({ when }) => when, figures: true },
+  { key: 'when', header: 'When', cell: ({ when }) => when },
   { key: 'where', header: 'Campaign', cell: ({ where }) => where },
   { key: 'interval', header: 'Tension, 95 %', cell: ({ interval }) => interval, figures: true, align: 'right' },
   { key: 'temperature', header: 'Steel temperature', cell: ({ temperature }) => temperature, figures: true, align: 'right' },

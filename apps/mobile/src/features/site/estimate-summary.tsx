@@ -24,7 +24,7 @@ export function EstimateSummary({ survey, row, output }: EstimateSummaryProps) {
   return (
     <Panel>
       <Row justify="space-between" align="flex-end">
-        <Text figures strong size="figure">
+        <Text strong size="figure">
           {tensionFigures(row, units)}
           <Text size="lead">{` ${symbol}`}</Text>
         </Text>

@@ -19,7 +19,6 @@ export function fitOrder<Peak extends Pick<ModalPeak, 'id' | 'mode' | 'plane'>>(
 
 /** The estimate that the server would make of these values; the input is the same, digit by digit. */
 export function estimateSpan(section: Section, span: Span, visit: VisitFindings, peaks: readonly ModalPeak[]): Outcome {
-  const started = performance.now();
   try {
     const used = peaks
       .filter((peak) => peak.used)
@@ -29,13 +28,30 @@ export function estimateSpan(section: Section, span: Span, visit: VisitFindings,
         plane,
         ...(standardUncertainty === null ? {} : { standardUncertainty }),
       }));
-    const output = estimateTension(surveyedCable(section, span, visit), used, {});
-    // Read by whoever measures how long the person waits for it.
-    performance.measure('strandnote.estimate', { start: started, end: performance.now() });
-    return { output, problem: null };
+    return { output: estimateTension(surveyedCable(section, span, visit), used, {}), problem: null };
   } catch (error) {
     if (!(error instanceof EstimationError)) throw error;
     return { output: null, problem: { code: error.code, field: error.field, message: error.message } };
+  }
+}
+
+/** The first fits after a page load are slow, because nothing is compiled yet: a few are made before the person types. */
+export function warmUp(section: Section, span: Span, expected: readonly number[]): void {
+  const visit = { lowerDamperState: 'none', upperDamperState: 'none', crossTied: false } as const;
+  for (let count = 1; count <= Math.min(6, expected.length); count++) {
+    const peaks = expected.slice(0, count).map((frequency, index): ModalPeak => {
+      return {
+        id: '',
+        mode: index + 1,
+        frequency,
+        standardUncertainty: null,
+        plane: 'in-plane',
+        source: 'typed',
+        used: true,
+        setAsideReason: null,
+      };
+    });
+    estimateSpan(section, span, visit, peaks);
   }
 }
 

@@ -4,6 +4,8 @@ import { space } from '../../theme/tokens.ts';
 import { Button, Heading, Panel, Row, Rule, Sheet, Stack, Text, TextField } from '../../ui/index.ts';
 import { type EntryAction, type EntryDraft, modeOf } from './entry-draft.ts';
 import type { EntryFindings } from './entry-findings.ts';
+import type { NumberingFindings } from './numbering-audit.ts';
+import { NumberingPanel } from './numbering-panel.tsx';
 import { pastedColumn } from './paste-column.ts';
 import { PeakRow } from './peak-row.tsx';
 
@@ -12,6 +14,7 @@ interface PeaksPanelProps {
   findings: EntryFindings;
   /** Hz, mode 1 first. */
   expected: readonly number[];
+  numbering: NumberingFindings | null;
   sister: { name: string; frequencies: ReadonlyMap<string, number> } | null;
   sensor: number | null;
   /** Saving was tried: what is wrong is shown at once. */
@@ -23,7 +26,7 @@ interface Focusable {
   focus: () => void;
 }
 
-export function PeaksPanel({ draft, findings, expected, sister, sensor, strict, dispatch }: PeaksPanelProps) {
+export function PeaksPanel({ draft, findings, expected, numbering, sister, sensor, strict, dispatch }: PeaksPanelProps) {
   const [pasting, setPasting] = useState(false);
   const { inputRefOf, keyPressOf, pasteOf } = useRowHandlers(draft, dispatch);
   const last = draft.peaks.at(-1);
@@ -65,7 +68,8 @@ export function PeaksPanel({ draft, findings, expected, sister, sensor, strict, 
         );
       })}
       <Rule />
-      <View style={{ paddingHorizontal: space(4), paddingVertical: space(2) }}>
+      <View style={{ paddingHorizontal: space(4), paddingVertical: space(2), gap: space(2) }}>
+        <NumberingPanel numbering={numbering} dispatch={dispatch} />
         <Row justify="space-between">
           <Text size="note" tone="muted">
             Touch a wave for its number, plane or uncertainty, or to set it aside.

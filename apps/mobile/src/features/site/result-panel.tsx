@@ -24,7 +24,7 @@ export function ResultPanel({ row, campaign, findings }: ResultProps) {
   const units = useUnits();
   const output = findings.outcome?.output ?? null;
   const decision = decideSpan(row.entry.cable, campaign, output);
-  const last = row.entry.lastSurvey.find(({ spanId }) => spanId === row.span.id) ?? null;
+  const last = lastSurveyOf(row);
   const bar = barOf(decision, output, last?.tension ?? null);
   const scale = sharedScale([bar]);
   return (
@@ -47,9 +47,6 @@ export function ResultPanel({ row, campaign, findings }: ResultProps) {
           <Row justify="space-between" gap={2}>
             <Text size="small" tone="muted" figures>
               {units.figure(scale.from, 'force')}
-            </Text>
-            <Text size="small" tone="muted">
-              {legend(output !== null, last, units)}
             </Text>
             <Text size="small" tone="muted" figures>
               {units.figure(scale.to, 'force')}
@@ -81,7 +78,7 @@ function Figures({ output, findings, units }: { output: StoredEstimate | null; f
   if (output.boundsOnly !== null) {
     const { low, high, symbol } = formatInterval(output.interval95, 'force', units.system);
     return (
-      <Text figures strong size="title">
+      <Text strong size="title">
         {`${low} to ${high}`}
         <Text size="lead">{` ${symbol}`}</Text>
       </Text>
@@ -89,19 +86,24 @@ function Figures({ output, findings, units }: { output: StoredEstimate | null; f
   }
   const { value, uncertainty, symbol } = formatWithUncertainty(output.tension, output.expanded.U, 'force', units.system);
   return (
-    <Text figures strong size="figure">
+    <Text strong size="figure">
       {value}
       <Text size="lead">{` \u00B1 ${uncertainty} ${symbol}`}</Text>
     </Text>
   );
 }
 
+type LastSurvey = ChecklistRow['entry']['lastSurvey'][number];
+
+function lastSurveyOf({ entry, span }: ChecklistRow): LastSurvey | null {
+  return entry.lastSurvey.find(({ spanId }) => spanId === span.id) ?? null;
+}
+
 /** What the bar shows besides the interval; the last survey never without its temperature. */
-function legend(measured: boolean, last: ChecklistRow['entry']['lastSurvey'][number] | null, units: Units): string {
-  const survey = last
-    ? `dot: ${units.figure(last.tension, 'force')} in ${showDay(last.startsOn).replace(/^\d+ /, '')}${last.steelTemperature === null ? '' : ` at ${units.show(last.steelTemperature, 'temperature')}`}`
-    : null;
-  return [survey, measured ? 'whisker: hinged to clamped' : null].filter(Boolean).join(' · ');
+function legend(measured: boolean, last: LastSurvey | null, units: Units): string {
+  const temperature = last?.steelTemperature == null ? '' : ` at ${units.show(last.steelTemperature, 'temperature')}`;
+  const survey = last ? `Dot: last survey ${units.show(last.tension, 'force')}, ${showDay(last.startsOn)}${temperature}.` : null;
+  return [survey, measured ? 'Whisker: both ends hinged to both clamped.' : null].filter(Boolean).join(' ');
 }
 
 function inWords(output: StoredEstimate, { zone, lowerLimit, upperLimit }: SurveyDecision, units: Units): string {
@@ -115,13 +117,20 @@ function inWords(output: StoredEstimate, { zone, lowerLimit, upperLimit }: Surve
 
 /** What must be known of the tension above, in the order of its weight. */
 export function ResultNotes({ row, campaign, findings }: ResultProps) {
+  const units = useUnits();
   const output = findings.outcome?.output ?? null;
   const decision = decideSpan(row.entry.cable, campaign, output);
+  const shown = legend(output !== null, lastSurveyOf(row), units);
   const plain = output !== null && (decision.zone === 'within' || decision.zone === 'outside');
   const serious = findings.notes.filter(({ severity }) => severity === 'serious');
   const others = findings.notes.filter(({ severity }) => severity !== 'serious');
   return (
     <Stack gap={2}>
+      {shown ? (
+        <Text size="note" tone="muted">
+          {shown}
+        </Text>
+      ) : null}
       {output && !plain ? (
         <Text size="note" tone="muted">
           {decision.reason}

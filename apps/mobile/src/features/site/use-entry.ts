@@ -1,6 +1,6 @@
 import type { CampaignDetail, Measurement } from '@strandnote/api/contract';
 import { freeLength } from '@strandnote/core';
-import { useDeferredValue, useMemo } from 'react';
+import { useDeferredValue, useEffect, useMemo } from 'react';
 import { useMeQuery } from '../../lib/session.tsx';
 import { useUnits } from '../../lib/units.tsx';
 import type { ChecklistRow } from './checklist-rows.ts';
@@ -8,6 +8,8 @@ import { draftOf, type EntryDraft, inSystem, newDraft } from './entry-draft.ts';
 import { findingsOf } from './entry-findings.ts';
 import { useEntryDraft } from './entry-store.ts';
 import { expectedFrequencies } from './expected-frequencies.ts';
+import { warmUp } from './live-estimate.ts';
+import { numberingFindings } from './numbering-audit.ts';
 import { sisterFrequencies, sisterOf } from './sister-cable.ts';
 import { agreedReference } from './survey-decision.ts';
 
@@ -38,25 +40,48 @@ export function useEntry({ survey, row, measurement }: EntryPlace) {
     () => (draft ? findingsOf(draft, { section: entry.cable.section, span, timeZone, units }) : null),
     [draft, entry.cable.section, span, timeZone, units],
   );
-  return { ...kept, findings, timeZone, sensor: sensorShare(draft, row), ...useComparison(survey, row, findings?.outcome?.output ?? null) };
+  return {
+    ...kept,
+    findings,
+    timeZone,
+    sensor: sensorShare(draft, row),
+    ...useComparison(survey, row, draft, findings?.outcome?.output ?? null),
+  };
 }
 
-/** Where the peaks should lie, and where those of the sister lie. */
-function useComparison(survey: CampaignDetail, row: ChecklistRow, fitNow: Parameters<typeof expectedFrequencies>[2]['fit']) {
+/** What the peaks are held against: where they should lie, where those of the sister lie, and how else they could be numbered. */
+function useComparison(
+  survey: CampaignDetail,
+  row: ChecklistRow,
+  draftNow: EntryDraft | null,
+  fitNow: Parameters<typeof expectedFrequencies>[2]['fit'],
+) {
   const { entry, span } = row;
   // What is expected may come a moment after the tension: the frame of a keystroke belongs to the estimate.
   const fit = useDeferredValue(fitNow);
+  const draft = useDeferredValue(draftNow);
   const reference = agreedReference(entry.cable, survey)?.meanChordValue ?? null;
   const last = entry.lastSurvey.find(({ spanId }) => spanId === span.id)?.tension ?? null;
   const expected = useMemo(
     () => expectedFrequencies(entry.cable.section, span, { fit, tension: last ?? reference }),
     [entry.cable.section, span, fit, last, reference],
   );
+  const { section } = entry.cable;
+  const known = expected.length > 0;
+  // biome-ignore lint/correctness/useExhaustiveDependencies: once for a cable, not with every fit
+  useEffect(() => {
+    const timer = setTimeout(() => warmUp(section, span, expected), 300);
+    return () => clearTimeout(timer);
+  }, [section, span, known]);
   const sister = useMemo(() => {
     const found = sisterOf(survey, entry);
     return found ? { name: found.cable.reference, frequencies: sisterFrequencies(found) } : null;
   }, [survey, entry]);
-  return { expected, sister };
+  const numbering = useMemo(
+    () => (draft ? numberingFindings(draft, { section: entry.cable.section, span, tension: last ?? reference }) : null),
+    [draft, entry.cable.section, span, last, reference],
+  );
+  return { expected, sister, numbering };
 }
 
 /** Place of the sensor as a share of the free length from its lower end. */

@@ -84,7 +84,6 @@ export function VisitPanel({ draft, row, problems, before, dispatch }: VisitPane
         hint="At the structure, as 2026-12-01 10:40."
         error={problems.visitedAt}
         autoComplete="off"
-        figures
       />
       <TextField
         label="Note"
