@@ -27,20 +27,52 @@ function makeDataFolder() {
   }
 }
 
+const host = process.env.HOST ?? '127.0.0.1';
+const onLoopback = ['127.0.0.1', 'localhost', '::1'].includes(host);
+
+/** An installation that others reach must know its own address: links in mail and the check of a request's origin need it. */
+function assertPublicAddress() {
+  if (onLoopback || process.env.PUBLIC_URL) return;
+  throw new Error(
+    `HOST is ${host}, so others can reach this server. Set PUBLIC_URL to its address, such as https://tensions.firm.example, and start again.`,
+  );
+}
+
+/** Only loopback shows a demonstration, and only where there is one already or nothing at all. */
+async function isDemonstration(ownerUrl) {
+  if (!onLoopback || process.env.PUBLIC_URL) return false;
+  const { firmsPresent } = await import('../src/demonstration/firms-present.ts');
+  const present = await firmsPresent(ownerUrl);
+  if (present === 'demonstration' && !existsSync(join(dataFolder, 'demonstration.json'))) {
+    throw new Error(`The demonstration was interrupted while it was laid. Delete the folder ${dataFolder} and start again.`);
+  }
+  return present !== 'real';
+}
+
 /** Starts the database and brings it up to date. Must run with the TypeScript loader registered. */
 export async function openInstallation() {
+  assertPublicAddress();
   makeDataFolder();
   const secrets = readSecrets();
   const cluster = process.env.DATABASE_SUPERUSER_URL
-    ? { url: () => process.env.DATABASE_SUPERUSER_URL, stop: () => undefined }
+    ? { url: () => process.env.DATABASE_SUPERUSER_URL, startedHere: false, stop: () => undefined }
     : startCluster({ home: join(dataFolder, 'postgres'), port: Number(process.env.PG_PORT ?? 4311), durable: true });
+  try {
+    return { cluster, ...(await describeInstallation(cluster, secrets)) };
+  } catch (error) {
+    if (cluster.startedHere) cluster.stop();
+    throw error;
+  }
+}
+
+async function describeInstallation(cluster, secrets) {
   const { prepareDatabase, ensureDatabase } = await import('../../../packages/db/src/migrate.ts');
   const superuserUrl = process.env.DATABASE_SUPERUSER_URL ?? (await ensureDatabase(cluster.url('postgres'), 'strandnote'));
   const urls = await prepareDatabase(superuserUrl, secrets.database);
   const port = Number(process.env.PORT ?? 4310);
-  const host = process.env.HOST ?? '127.0.0.1';
-  const demonstration = host === '127.0.0.1' && !process.env.PUBLIC_URL;
+  const demonstration = await isDemonstration(urls.owner);
   const environment = {
+    NODE_ENV: 'production',
     HOST: host,
     PORT: String(port),
     DATABASE_URL_APP: urls.app,
@@ -52,5 +84,5 @@ export async function openInstallation() {
     AUTH_SECRET: secrets.auth,
     DEMONSTRATION: String(demonstration),
   };
-  return { cluster, urls, environment, demonstration, address: process.env.PUBLIC_URL ?? `http://127.0.0.1:${port}` };
+  return { urls, environment, demonstration, address: process.env.PUBLIC_URL ?? `http://127.0.0.1:${port}` };
 }

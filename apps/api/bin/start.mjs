@@ -12,8 +12,7 @@ try {
 }
 
 async function start() {
-  const port = Number(process.env.PORT ?? 4310);
-  await assertFree(process.env.HOST ?? '127.0.0.1', port);
+  await assertFree(process.env.HOST ?? '127.0.0.1', readPort(process.env.PORT ?? '4310'));
   install();
   const { register } = await import('tsx/esm/api');
   register();
@@ -39,12 +38,19 @@ async function serve({ cluster, urls, environment, demonstration, address }, dat
   }
   environment.WEB_ROOT = join(root, 'apps', 'mobile', 'dist');
   const children = [run('server.ts', environment), run('worker.ts', environment)];
-  await Promise.all(children.map((child) => new Promise((resolve) => child.once('message', resolve))));
-  announce(address, accounts);
-  stopTogether(children, async () => {
+  const last = async () => {
     await mailServer?.stop();
     cluster.stop();
-  });
+  };
+  // From here on a signal, or the end of either, ends all in order.
+  stopTogether(children, last);
+  await Promise.all(children.map(ready));
+  announce(address, accounts);
+}
+
+/** The other processes say when they are ready; one that ends instead has said why, and takes the rest with it. */
+function ready(child) {
+  return new Promise((resolve) => child.once('message', resolve));
 }
 
 function run(program, environment) {
@@ -64,6 +70,7 @@ function announce(address, accounts) {
     console.log(`${address}/demonstration/mail\n`);
     for (const { role, email, password } of accounts) console.log(`  ${role.padEnd(14)} ${email.padEnd(34)} ${password}`);
   }
+  if (!accounts && !process.env.SMTP_URL) console.log('\nMail waits in the queue: set SMTP_URL to the server that sends it.');
   console.log('\nCtrl-C stops it; the data stay.');
 }
 
@@ -87,6 +94,12 @@ function ended(child) {
     child.once('exit', resolve);
     child.kill('SIGTERM');
   });
+}
+
+function readPort(text) {
+  const port = Number(text);
+  if (Number.isInteger(port) && port > 0 && port <= 65_535) return port;
+  throw new Error(`PORT is "${text}". Set it to a number between 1 and 65535.`);
 }
 
 function assertFree(host, port) {

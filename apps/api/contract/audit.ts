@@ -13,6 +13,8 @@ export const auditEvent = z.object({
 });
 export type AuditEvent = z.infer<typeof auditEvent>;
 export const auditList = listOf(auditEvent);
+/** The page before an event: the trail is read backwards, 200 events at a time. */
+export const auditQuery = z.strictObject({ before: z.coerce.number().int().min(1).max(Number.MAX_SAFE_INTEGER).optional() });
 
 /** The outcome of recomputing the firm's whole chain. */
 export const auditVerification = z.object({

@@ -16,7 +16,10 @@ async function main(): Promise<void> {
     process.exit(1);
   });
   server.listen(env.PORT, env.HOST, () => process.send?.('listening'));
+  let stopping = false;
   const stop = () => {
+    if (stopping) return;
+    stopping = true;
     server.close(() => {
       close().then(
         () => process.exit(0),

@@ -19,7 +19,10 @@ async function main(): Promise<void> {
     taskList: createTasks(deps),
   });
   process.send?.('running');
+  let stopping = false;
   const stop = () => {
+    if (stopping) return;
+    stopping = true;
     runner
       .stop()
       .then(close)

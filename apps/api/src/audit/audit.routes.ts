@@ -1,27 +1,35 @@
-import { auditList, auditVerification } from '@strandnote/api/contract';
+import { type AuditEvent, auditList, auditQuery, auditVerification } from '@strandnote/api/contract';
 import { type Actor, schema, type Tx, withFirm } from '@strandnote/db';
-import { and, desc, eq, inArray, or, type SQL, sql } from 'drizzle-orm';
+import { and, desc, eq, inArray, lt, or, type SQL } from 'drizzle-orm';
 import { firmRoute } from '../http/route.ts';
 import { verifyChain } from './verify-chain.ts';
 
 const { auditEvents, cableChecks, revisions, submissions } = schema;
+
+const pageLength = 200;
+
+function toAuditEvent(row: typeof auditEvents.$inferSelect): AuditEvent {
+  const { sequence, at, actorName, act, subjectKind, subjectId, details, hash } = row;
+  return { sequence, at: at.toISOString(), actorName, act, subjectKind, subjectId, details, hash };
+}
 
 export const auditRoutes = [
   firmRoute({
     method: 'get',
     path: '/audit',
     access: 'audit.read',
-    summary: 'The last 500 events: all for an administrator, those of their own work or of what they check for the others',
+    summary: 'The last 200 events, or those before one: all for an administrator, of their own work or of what they check for others',
+    query: auditQuery,
     reply: auditList,
-    handle: ({ deps, who }) =>
+    handle: ({ deps, who, query: { before } }) =>
       withFirm(deps.db, who, async (tx) => {
         const rows = await tx
           .select()
           .from(auditEvents)
-          .where(await visibleTo(tx, who))
+          .where(and(await visibleTo(tx, who), before === undefined ? undefined : lt(auditEvents.sequence, before)))
           .orderBy(desc(auditEvents.sequence))
-          .limit(500);
-        return { items: rows.map((row) => ({ ...row, at: row.at.toISOString() })) };
+          .limit(pageLength);
+        return { items: rows.map(toAuditEvent) };
       }),
   }),
   firmRoute({
@@ -52,7 +60,7 @@ async function visibleTo(tx: Tx, actor: Actor): Promise<SQL | undefined> {
       .from(submissions)
       .innerJoin(cableChecks, eq(cableChecks.submissionId, submissions.id))
       .where(eq(cableChecks.checkedBy, actor.userId));
-    const inCheck = await tx.select({ id: revisions.id }).from(revisions).where(sql`${revisions.state} = 'in check'`);
+    const inCheck = await tx.select({ id: revisions.id }).from(revisions).where(eq(revisions.state, 'in check'));
     subjects.push(...rows.map(({ id }) => id), ...inCheck.map(({ id }) => id));
   }
   return subjects.length === 0 ? own : or(own, and(eq(auditEvents.subjectKind, 'revision'), inArray(auditEvents.subjectId, subjects)));

@@ -4,6 +4,7 @@ import { publicRoute, type Route } from './route.ts';
 
 /** The description of the API, and a plain page that reads it out. Both are made from the same routes that are served. */
 export function docsRoutes(routes: () => readonly Route[]): Route[] {
+  let description: ReturnType<typeof describeApi> | undefined;
   return [
     publicRoute({
       method: 'get',
@@ -18,7 +19,8 @@ export function docsRoutes(routes: () => readonly Route[]): Route[] {
       summary: 'This description of the API (OpenAPI 3.1)',
       reply: 'file',
       handle: async ({ response }) => {
-        response.json(describeApi(routes()));
+        description ??= describeApi(routes());
+        response.json(description);
       },
     }),
     publicRoute({

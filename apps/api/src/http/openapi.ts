@@ -1,4 +1,5 @@
-import { problem } from '@strandnote/api/contract';
+import * as contract from '@strandnote/api/contract';
+import { z } from 'zod';
 import { createDocument, type ZodOpenApiOperationObject, type ZodOpenApiPathsObject } from 'zod-openapi';
 import type { Route } from './route.ts';
 
@@ -14,25 +15,36 @@ export function describeApi(routes: readonly Route[]) {
     info: { title: 'Strandnote', version: '1', description: 'Quantities are SI. Errors are Problem Details (RFC 9457) with a code.' },
     servers: [{ url: '/api/v1' }],
     paths,
+    components: {
+      schemas: namedSchemas(),
+      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'better-auth.session_token' } },
+    },
   });
 }
 
 function describe(route: Route): ZodOpenApiOperationObject {
-  const parameters = [...route.path.matchAll(/:(\w+)/g)].map(([, name]) => ({
-    name: name!,
-    in: 'path' as const,
-    required: true,
-    schema: { type: 'string' as const },
-  }));
   const reply = route.reply === 'file' ? {} : { content: { 'application/json': { schema: route.reply } } };
+  const { query } = route;
   return {
     summary: route.summary,
     description: route.access === 'public' ? 'Needs no account.' : `Act: ${route.access}`,
-    parameters,
-    ...(route.body ? { requestBody: { content: { 'application/json': { schema: route.body } } } } : {}),
+    requestParams: { path: pathParams(route), ...(query instanceof z.ZodObject ? { query } : {}) },
+    ...(route.access === 'public' ? {} : { security: [{ session: [] }] }),
+    ...(route.body ? { requestBody: { required: true, content: { 'application/json': { schema: route.body } } } } : {}),
     responses: {
       [String(route.status ?? 200)]: { description: route.summary, ...reply },
-      default: { description: 'Why not', content: { 'application/problem+json': { schema: problem } } },
+      default: { description: 'Why not', content: { 'application/problem+json': { schema: contract.problem } } },
     },
   };
+}
+
+function pathParams({ path, params }: Route): z.ZodObject {
+  const own = params instanceof z.ZodObject ? params.shape : {};
+  return z.object(path.startsWith('/firms/:firmId') ? { firmId: contract.id, ...own } : own);
+}
+
+/** The shapes of the contract under their own names, so that each is described once. */
+function namedSchemas(): Record<string, z.ZodType> {
+  const shapes = Object.entries<unknown>(contract).filter((entry): entry is [string, z.ZodObject] => entry[1] instanceof z.ZodObject);
+  return Object.fromEntries(shapes.map(([name, schema]) => [name.charAt(0).toUpperCase() + name.slice(1), schema]));
 }

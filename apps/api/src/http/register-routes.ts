@@ -57,7 +57,7 @@ async function whoCalls(deps: AppDeps, route: Route, request: Request): Promise<
   if (route.access === 'public') return null;
   const person = await currentPerson(deps, request);
   if (route.access === 'signed-in') return person;
-  const actor = await requireMember(deps, person, String(request.params['firmId']));
+  const actor = await requireMember(deps, person, String(request.params.firmId));
   assertCan(actor, route.access);
   return actor;
 }

@@ -37,6 +37,7 @@ interface Shape<P, B, R, Q> {
   /** Attempts a minute from one address. */
   perMinute?: number;
 }
+// biome-ignore lint/suspicious/noConfusingVoidType: what the handler of a file promises, which has nothing to give back
 type Reply<R> = R extends Schema ? z.input<R> : void;
 
 /** Any route, as the server, the API description and the test matrix read it. */
