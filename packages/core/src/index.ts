@@ -41,6 +41,7 @@ export { EstimationError, type EstimationErrorCode } from './errors.ts';
 export { type ChangeOptions, type TensionChange, tensionChange } from './fit/change.ts';
 export { estimateTension } from './fit/estimate-tension.ts';
 export { fitHingedLine, fitLine, type HingedLineFit, type LineFit } from './fit/linear-fit.ts';
+export { type MonteCarloResult, monteCarloTension } from './fit/monte-carlo.ts';
 export { type PlausibilityQuestion, questionPlausibility } from './fit/plausibility.ts';
 export {
   type BudgetLine,

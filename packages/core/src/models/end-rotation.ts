@@ -30,8 +30,8 @@ export type WavenumberSolution = Float64Array;
 
 /** e^{−y} below this changes no digit of x. */
 const deepestCoupling = 40;
-/** Below this y the derivatives follow the coupling of the ends as well. */
-const derivativeCoupling = 26;
+/** Below this y the derivatives follow the coupling of the ends as well: e^{−16} of a derivative moves no optimum. */
+const derivativeCoupling = 16;
 const iterationLimit = 60;
 
 /**
