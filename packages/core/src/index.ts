@@ -55,8 +55,9 @@ export {
   type StiffnessPrior,
   type TensionEstimate,
 } from './fit/tension-estimate.ts';
-export { modeShape } from './models/mode-shape.ts';
 // Forward models
+export { type DampedMode, dampedFrequencies } from './models/damped-frequencies.ts';
+export { modeShape } from './models/mode-shape.ts';
 export { type CableState, naturalFrequencies } from './models/natural-frequencies.ts';
 export { type FormulaCable, type FormulaTension, practicalFormulas } from './models/practical-formulas.ts';
 export { stiffStringFrequencies } from './models/stiff-string.ts';
