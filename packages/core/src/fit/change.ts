@@ -15,7 +15,8 @@ import { type EndNode, type FixityNode, fixityNodes } from './fixity-nodes.ts';
 import { settleNoise } from './frequency-noise.ts';
 import { mergeComponents, mixtureMoments, mixtureQuantile } from './mixture.ts';
 import { modelCorrection } from './model-correction.ts';
-import { evaluateModel, type ModelCorrection, type NodeWorkspace, nodeWorkspace } from './node-fit.ts';
+import { evaluateModel } from './node-fit.ts';
+import { type ModelCorrection, type NodeWorkspace, nodeWorkspace } from './node-workspace.ts';
 import { scoutEnds } from './scout-ends.ts';
 
 /** What a caller may choose. */

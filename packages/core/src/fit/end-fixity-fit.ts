@@ -17,7 +17,8 @@
 import { type FitProblem, stringTension } from './fit-problem.ts';
 import { type FixityNode, gaussLegendre } from './fixity-nodes.ts';
 import { truncatedNormal } from './mixture.ts';
-import { fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace, type StiffnessFreedom } from './node-fit.ts';
+import { fitNode, type NodeFit } from './node-fit.ts';
+import type { ModelCorrection, NodeWorkspace, StiffnessFreedom } from './node-workspace.ts';
 import { logPrior, type StiffnessPlan } from './stiffness-plan.ts';
 
 /** One component of the posterior. */

@@ -14,7 +14,7 @@ import { type EndNode, type FixityNode, fixityNodes } from './fixity-nodes.ts';
 import { type SettledNoise, settleNoise, stiffnessIsFitted } from './frequency-noise.ts';
 import { modelCorrection } from './model-correction.ts';
 import { type BracketFit, modelResiduals, modelTable } from './model-table.ts';
-import { type ModelCorrection, type NodeWorkspace, nodeWorkspace } from './node-fit.ts';
+import { type ModelCorrection, type NodeWorkspace, nodeWorkspace } from './node-workspace.ts';
 import { assemblePosterior, inputUncertainty, type LengthShift, type Posterior } from './posterior.ts';
 import { scoutEnds } from './scout-ends.ts';
 import { ENGINE_VERSION, type EstimateOptions, type TensionEstimate } from './tension-estimate.ts';

@@ -11,7 +11,7 @@
 import { type FitProblem, withUncertainties } from './fit-problem.ts';
 import type { EndNode } from './fixity-nodes.ts';
 import { chiSquaredExceedance } from './mixture.ts';
-import type { ModelCorrection, NodeWorkspace } from './node-fit.ts';
+import type { ModelCorrection, NodeWorkspace } from './node-workspace.ts';
 import { planStiffness, type StiffnessPlan } from './stiffness-plan.ts';
 
 /** A problem whose uncertainties are settled, and how. */

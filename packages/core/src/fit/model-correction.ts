@@ -9,7 +9,8 @@ import { type EndForm, wavenumber } from '../models/end-rotation.ts';
 import { type SagProperties, sagProperties, sagStiffnessOf } from '../models/sag.ts';
 import type { FitProblem } from './fit-problem.ts';
 import type { EndNode } from './fixity-nodes.ts';
-import { type ModelCorrection, setEndForm } from './node-fit.ts';
+import { setEndForm } from './node-fit.ts';
+import type { ModelCorrection } from './node-workspace.ts';
 import { emptyCorrection, sagCorrection } from './sag-correction.ts';
 
 /** The correction of a problem; null for a bare cable without sag. */

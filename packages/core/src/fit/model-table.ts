@@ -5,7 +5,8 @@ import { practicalFormulas } from '../models/practical-formulas.ts';
 import type { FitProblem } from './fit-problem.ts';
 import type { EndNode } from './fixity-nodes.ts';
 import { fitHingedLine } from './linear-fit.ts';
-import { evaluateModel, type ModelCorrection, type NodeWorkspace } from './node-fit.ts';
+import { evaluateModel } from './node-fit.ts';
+import type { ModelCorrection, NodeWorkspace } from './node-workspace.ts';
 import type { Posterior } from './posterior.ts';
 import type { ModelRow, PeakResidual } from './tension-estimate.ts';
 

@@ -8,40 +8,12 @@
  * so that ∂ln f/∂p follows from ∂x/∂p. A log-normal prior on EI is one more observation. Everything is written into a
  * workspace made once per estimate: the inner loop allocates nothing.
  */
-import type { EndForm, WavenumberSolution } from '../models/end-rotation.ts';
+import type { EndForm } from '../models/end-rotation.ts';
 import { solveWavenumber } from '../models/end-rotation.ts';
 import type { FitProblem } from './fit-problem.ts';
 import type { EndNode } from './fixity-nodes.ts';
-
-/** What exact sag and attachments add to ln f of the bare cable, with derivatives; see ./model-correction. */
-export interface ModelCorrection {
-  /** Fills `shift`, `byTension` and `byStiffness` for every peak at t = ln T, e = ln EI. */
-  evaluate(t: number, e: number, first: EndNode, second: EndNode): void;
-  shift: Float64Array;
-  byTension: Float64Array;
-  byStiffness: Float64Array;
-  byLength: Float64Array;
-  byMass: Float64Array;
-  byAxialStiffness: Float64Array;
-}
-
-/** How ln EI is treated in a node. */
-export type StiffnessFreedom = { kind: 'fixed' } | { kind: 'free'; mean: number; weight: number };
-
-/** Room for one fit at a time. Lengths: one per peak. */
-export interface NodeWorkspace {
-  solution: WavenumberSolution;
-  first: EndForm;
-  second: EndForm;
-  residuals: Float64Array;
-  byTension: Float64Array;
-  byStiffness: Float64Array;
-  byLength: Float64Array;
-  byMass: Float64Array;
-  byAxialStiffness: Float64Array;
-  /** Last wavenumber of every peak: the next node begins there. */
-  wavenumbers: Float64Array;
-}
+import type { ModelCorrection, NodeWorkspace, StiffnessFreedom } from './node-workspace.ts';
+import { type Quadratic, quadratic } from './quadratic-model.ts';
 
 /** The fit at a node. Covariances are those of (t, e) given the node. */
 export interface NodeFit {
@@ -56,23 +28,6 @@ export interface NodeFit {
   /** ∂t/∂e along the valley of best t, for the next start. */
   valley: number;
   converged: boolean;
-}
-
-/** Makes the workspace of a problem of `count` peaks. */
-export function nodeWorkspace(count: number): NodeWorkspace {
-  const row = () => new Float64Array(count);
-  return {
-    solution: new Float64Array(4),
-    first: { a: 1, b: 0 },
-    second: { a: 1, b: 0 },
-    residuals: row(),
-    byTension: row(),
-    byStiffness: row(),
-    byLength: row(),
-    byMass: row(),
-    byAxialStiffness: row(),
-    wavenumbers: row(),
-  };
 }
 
 const iterationLimit = 40;
@@ -136,73 +91,6 @@ export function fitNode(
 
 function clampStep(step: number, limit: number): number {
   return Number.isFinite(step) ? Math.max(-limit, Math.min(limit, step)) : 0;
-}
-
-interface Quadratic {
-  chiSquared: number;
-  objective: number;
-  stepT: number;
-  stepE: number;
-  varianceTension: number;
-  covariance: number;
-  varianceStiffness: number;
-  valley: number;
-  /** What the whole step takes from the objective. */
-  gain: number;
-}
-
-/** χ² here and the step to the minimum of its quadratic model. */
-function quadratic(problem: FitProblem, work: NodeWorkspace, freedom: StiffnessFreedom, e: number): Quadratic {
-  const { residuals, byTension, byStiffness } = work;
-  const { weights } = problem;
-  let tt = 0;
-  let te = 0;
-  let ee = 0;
-  let gt = 0;
-  let ge = 0;
-  let chiSquared = 0;
-  for (let i = 0; i < weights.length; i++) {
-    const w = weights[i]!;
-    const r = residuals[i]!;
-    const jt = byTension[i]!;
-    const je = byStiffness[i]!;
-    tt += w * jt * jt;
-    te += w * jt * je;
-    ee += w * je * je;
-    gt += w * jt * r;
-    ge += w * je * r;
-    chiSquared += w * r * r;
-  }
-  if (freedom.kind === 'fixed') {
-    return {
-      chiSquared,
-      objective: chiSquared,
-      stepT: gt / tt,
-      stepE: 0,
-      varianceTension: 1 / tt,
-      covariance: 0,
-      varianceStiffness: 0,
-      valley: -te / tt,
-      gain: (gt * gt) / tt,
-    };
-  }
-  ee += freedom.weight;
-  ge -= freedom.weight * (e - freedom.mean);
-  // One peak cannot tell both: a whisper of a prior keeps the system regular without moving it.
-  const determinant = Math.max(tt * ee - te * te, 1e-12 * tt * ee);
-  const stepT = (ee * gt - te * ge) / determinant;
-  const stepE = (tt * ge - te * gt) / determinant;
-  return {
-    chiSquared,
-    objective: chiSquared + freedom.weight * (e - freedom.mean) ** 2,
-    stepT,
-    stepE,
-    varianceTension: ee / determinant,
-    covariance: -te / determinant,
-    varianceStiffness: tt / determinant,
-    valley: -te / tt,
-    gain: gt * stepT + ge * stepE,
-  };
 }
 
 /**

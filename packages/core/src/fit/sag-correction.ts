@@ -9,7 +9,8 @@ import { type EndForm, wavenumber } from '../models/end-rotation.ts';
 import { type SagProperties, sagFunction, sagParameter, sagWavenumber } from '../models/sag.ts';
 import type { FitProblem } from './fit-problem.ts';
 import type { EndNode } from './fixity-nodes.ts';
-import { type ModelCorrection, setEndForm } from './node-fit.ts';
+import { setEndForm } from './node-fit.ts';
+import type { ModelCorrection } from './node-workspace.ts';
 
 /** How far ln T and ln EI may move before the sag is computed anew. */
 const reach = { t: 4e-3, e: 0.4 };

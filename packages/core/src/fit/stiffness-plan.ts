@@ -3,7 +3,8 @@
  */
 import { type FitProblem, stringTension } from './fit-problem.ts';
 import type { EndNode } from './fixity-nodes.ts';
-import { fitNode, type ModelCorrection, type NodeFit, type NodeWorkspace } from './node-fit.ts';
+import { fitNode, type NodeFit } from './node-fit.ts';
+import type { ModelCorrection, NodeWorkspace } from './node-workspace.ts';
 import type { StiffnessPrior } from './tension-estimate.ts';
 
 /** Where a fit starts, and what happens to ln EI in it. */
