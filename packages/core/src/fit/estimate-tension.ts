@@ -76,7 +76,7 @@ const clamped: EndNode = { fixity: 1, stiffness: null };
 /** Short cables with good frequencies tell more of their ends: the quadrature is refined. */
 function isSharp({ problem, plan }: SettledNoise): boolean {
   const xi = problem.length * Math.exp((plan.start.logTension - plan.start.logStiffness) / 2);
-  return xi < 30 && problem.uncertainties.some((u) => u < 0.001);
+  return xi < 60 && problem.uncertainties.some((u) => u * xi < 0.08);
 }
 
 /** Whether exchanging the ends changes no frequency: what sits on the cable sits in its middle, or nothing does. */

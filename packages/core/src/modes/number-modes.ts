@@ -8,7 +8,7 @@
  */
 import { assertRange, EstimationError } from '../errors.ts';
 import { best, plantSeeds, toggle } from './grow-numbering.ts';
-import type { Candidate, NumberingProblem } from './numbering-score.ts';
+import { type Candidate, meanFundamental, type NumberingProblem } from './numbering-score.ts';
 
 /** What is known besides the frequencies. */
 export interface NumberingOptions {
@@ -69,7 +69,7 @@ export function numberModes(frequencies: readonly number[], options: NumberingOp
   toggle(problem, found, 30);
   toggle(problem, found, 8);
   toggle(problem, found, 8);
-  return describe(best(found, found.size), order, options);
+  return describe(problem, best(found, found.size), order, options);
 }
 
 function checkNumbering(frequencies: readonly number[], { cable, tension, relativeUncertainty }: NumberingOptions): void {
@@ -100,12 +100,18 @@ function fundamentalPrior({ cable, tension }: NumberingOptions): NumberingProble
   return { mean: Math.log(fundamental), deviation: Math.hypot(tension.relativeUncertainty / 2, 0.02) };
 }
 
-function describe(candidates: Candidate[], order: readonly number[], { cable }: NumberingOptions): ModeNumbering[] {
+function describe(
+  problem: NumberingProblem,
+  candidates: Candidate[],
+  order: readonly number[],
+  { cable }: NumberingOptions,
+): ModeNumbering[] {
   const highest = candidates[0]?.logScore ?? 0;
   const shares = candidates.map(({ logScore }) => Math.exp(logScore - highest));
   const total = shares.reduce((sum, share) => sum + share, 0);
   return candidates.slice(0, listed).map((candidate, i) => {
     const { fundamental, curvature } = candidate;
+    const mean = meanFundamental(problem, candidate);
     const modes: (number | null)[] = order.map(() => null);
     candidate.modes.forEach((n, place) => {
       modes[order[place]!] = n === 0 ? null : n;
@@ -120,8 +126,8 @@ function describe(candidates: Candidate[], order: readonly number[], { cable }: 
       odds: Math.min(1e9, shares[i]! / Math.max(shares[i + 1] ?? 0, 1e-300)),
       probability: shares[i]! / total,
       tensionProbability: alike / total,
-      fundamental: fundamental * Math.sqrt(1 + curvature),
-      tension: cable ? 4 * cable.massPerLength * (cable.length * fundamental) ** 2 : null,
+      fundamental: mean * Math.sqrt(1 + curvature),
+      tension: cable ? 4 * cable.massPerLength * (cable.length * mean) ** 2 : null,
     };
   });
 }

@@ -8,7 +8,7 @@
  *       × (0.7/(1.05 f_max))^foreign × detection
  *
  * with the integral over ln f_0 analytic, B uniform in v = ln((B + 1e-4)/1e-4) and integrated by the trapezoidal rule around the
- * fitted one, and detection of the modes below f_max as Beta(3, 1.5), 2 % each for "even modes only" and "odd modes only".
+ * fitted one, and detection of the modes below f_max as Beta(3, 1.5), 1 % each for "even modes only" and "odd modes only".
  * Values tuned by simulation.
  */
 
@@ -40,7 +40,7 @@ const curvatureWidth = Math.log((highestCurvature + curvatureUnit) / curvatureUn
 const curvaturePoints = 11;
 const foreignRate = 0.7;
 /** Share of surveys in which every odd mode, or every even one, stays unseen (common practice). */
-const onlyHalf = 0.02;
+const onlyHalf = 0.01;
 /** ln f_0 without a tension: flat over a factor of a thousand. */
 const flatDensity = 1 / Math.log(1000);
 
@@ -73,18 +73,50 @@ export function scoreNumbering(problem: NumberingProblem, candidate: Candidate):
 }
 
 /** Integral over ln f_0, curvature and noise. */
-function marginal(problem: NumberingProblem, { modes, curvature }: Candidate, named: number): number {
+function marginal(problem: NumberingProblem, candidate: Candidate, named: number): number {
+  let total = 0;
+  overCurvature(problem, candidate, named, (curvature, share) => {
+    total += share * atCurvature(problem, candidate.modes, curvature, named);
+  });
+  return total;
+}
+
+/**
+ * Fundamental of a numbering as the mean over curvature: the fitted curvature of a few noisy peaks wanders, its prior holds it.
+ */
+export function meanFundamental(problem: NumberingProblem, candidate: Candidate): number {
+  const { modes } = candidate;
+  const named = modes.reduce((count, n) => count + (n > 0 ? 1 : 0), 0);
+  let total = 0;
+  let sum = 0;
+  overCurvature(problem, candidate, named, (curvature, share) => {
+    const weight = share * atCurvature(problem, modes, curvature, named);
+    const logs = modes.reduce(
+      (all, n, i) => (n === 0 ? all : all + problem.logs[i]! - modeLogs[n]! - 0.5 * Math.log(1 + curvature * n * n)),
+      0,
+    );
+    total += weight;
+    sum += (weight * logs) / named;
+  });
+  return total > 0 ? Math.exp(sum / total) : candidate.fundamental;
+}
+
+/** Trapezoidal rule in v around the fitted curvature; shares carry the prior density. */
+function overCurvature(
+  problem: NumberingProblem,
+  { modes, curvature }: Candidate,
+  named: number,
+  visit: (curvature: number, share: number) => void,
+): void {
   const widest = problem.noise.reduce((most, { sigma }) => Math.max(most, sigma), 0);
   const reach = 3.5 * widest * curvatureDeviation(modes, curvature, named);
   const place = (b: number) => Math.log((Math.max(0, Math.min(highestCurvature, b)) + curvatureUnit) / curvatureUnit);
   const from = place(curvature - reach);
   const step = (place(curvature + reach) - from) / (curvaturePoints - 1);
-  let total = 0;
   for (let k = 0; k < curvaturePoints; k++) {
-    const share = k === 0 || k === curvaturePoints - 1 ? 0.5 : 1;
-    total += share * atCurvature(problem, modes, curvatureUnit * Math.expm1(from + k * step), named);
+    const edge = k === 0 || k === curvaturePoints - 1 ? 0.5 : 1;
+    visit(curvatureUnit * Math.expm1(from + k * step), (edge * step) / curvatureWidth);
   }
-  return (total * step) / curvatureWidth;
 }
 
 /** Standard deviation of B over that of a frequency, the fundamental being free; without end for a single mode. */
