@@ -15,6 +15,8 @@ export interface FitFindings {
   xi: number;
   lambdaSquared: number | null;
   relativeExpanded: number;
+  /** Posterior mean and standard deviation of ln EI. */
+  logStiffness: { mean: number; deviation: number };
 }
 
 const percent = (fraction: number) => `${(100 * fraction).toPrecision(2)} %`;
@@ -25,7 +27,13 @@ const percent = (fraction: number) => `${(100 * fraction).toPrecision(2)} %`;
  * @returns notes in the order of their weight
  */
 export function fitWarnings(findings: FitFindings): EstimateNote[] {
-  return [...dataWarnings(findings), ...modelWarnings(findings), ...assumptionWarnings(findings)];
+  return [
+    ...dataWarnings(findings),
+    ...sensorWarnings(findings),
+    ...modelWarnings(findings),
+    ...stiffnessWarnings(findings),
+    ...assumptionWarnings(findings),
+  ];
 }
 
 function dataWarnings({ settled, residuals }: FitFindings): EstimateNote[] {
@@ -66,6 +74,45 @@ function dataWarnings({ settled, residuals }: FitFindings): EstimateNote[] {
     });
   }
   return [...notes, ...outliers(residuals, problem.uncertainties)];
+}
+
+/** Share of its amplitude below which a mode is not heard (a twentieth: some 26 dB). */
+const heard = 0.05;
+
+/** Modes that the sensor sits in a node of, by the shape of a string. */
+function sensorWarnings({ settled, options }: FitFindings): EstimateNote[] {
+  const { sensorPosition } = options;
+  const { length, peaks } = settled.problem;
+  if (sensorPosition === undefined || sensorPosition <= 0 || sensorPosition >= length) return [];
+  const blind = peaks.filter(({ mode }) => Math.abs(Math.sin((mode * Math.PI * sensorPosition) / length)) < heard).map(({ mode }) => mode);
+  if (blind.length === 0) return [];
+  return [
+    {
+      code: 'sensor-blind',
+      severity: 'caution',
+      field: 'peaks',
+      message: `Where the sensor sat, mode ${[...new Set(blind)].join(', ')} hardly moves: check that the peak belongs to this cable and carries the right number.`,
+    },
+  ];
+}
+
+/** Bending stiffness that the frequencies press against a bound of what the section allows. */
+function stiffnessWarnings({ settled, logStiffness }: FitFindings): EstimateNote[] {
+  const { prior } = settled.problem;
+  if (prior.kind !== 'bounds') return [];
+  const [low, high] = [Math.log(prior.bounds[0]), Math.log(prior.bounds[1])];
+  const room = high - low;
+  const nearest = Math.min(logStiffness.mean - low, high - logStiffness.mean);
+  if (nearest > 0.15 * room || logStiffness.deviation > 0.15 * room) return [];
+  const side = logStiffness.mean - low < high - logStiffness.mean ? 'lower' : 'upper';
+  return [
+    {
+      code: 'bending-stiffness-at-bound',
+      severity: 'caution',
+      field: 'bendingStiffnessBounds',
+      message: `The frequencies press the bending stiffness against its ${side} bound. Check the section, the mode numbers and the length.`,
+    },
+  ];
 }
 
 /** A peak whose residual stands far out from the rest, judged by the median of the others. */

@@ -116,7 +116,16 @@ function describe(fitted: FittedCable): TensionEstimate {
   const residuals = modelResiduals(problem, [node.first, node.second], fit, work, correction);
   const xi = problem.length * Math.exp((posterior.logTension - posterior.logStiffness) / 2);
   const lambdaSquared = lambda(problem, tension);
-  const findings: FitFindings = { settled, options, residuals, budget, xi, lambdaSquared, relativeExpanded: U / tension };
+  const findings: FitFindings = {
+    settled,
+    options,
+    residuals,
+    budget,
+    xi,
+    lambdaSquared,
+    relativeExpanded: U / tension,
+    logStiffness: { mean: posterior.logStiffness, deviation: Math.sqrt(posterior.stiffnessVariance) },
+  };
   return {
     engineVersion: ENGINE_VERSION,
     tension,
