@@ -2,7 +2,24 @@ import type { CampaignDetail } from '@strandnote/api/contract';
 import { useLocalSearchParams } from 'expo-router';
 import { useMemo, useState } from 'react';
 import { hasRole, useFirm } from '../../lib/session.tsx';
-import { Button, Caution, Checkbox, Empty, Gloved, Loading, Page, Problem, Progress, Row, Stack, Tag, TextField } from '../../ui/index.ts';
+import { type Units, useUnits } from '../../lib/units.tsx';
+import {
+  Button,
+  Caution,
+  Checkbox,
+  Columns,
+  Empty,
+  Gloved,
+  Loading,
+  Page,
+  Problem,
+  Progress,
+  Stack,
+  Tag,
+  Text,
+  TextField,
+  useWide,
+} from '../../ui/index.ts';
 import { CampaignFacts } from './campaign-facts.tsx';
 import { ChecklistElevation } from './checklist-elevation.tsx';
 import { ChecklistList } from './checklist-list.tsx';
@@ -28,6 +45,8 @@ export function ChecklistScreen() {
 
 function ChecklistView({ survey, listHref }: { survey: CampaignDetail; listHref: string }) {
   const firm = useFirm();
+  const wide = useWide();
+  const units = useUnits();
   const rows = useMemo(() => checklistRows(survey), [survey]);
   const [typed, setTyped] = useState('');
   const [onlyToMeasure, setOnlyToMeasure] = useState(false);
@@ -55,26 +74,38 @@ function ChecklistView({ survey, listHref }: { survey: CampaignDetail; listHref:
         ) : null
       }
     >
-      <ChecklistElevation survey={survey} rows={rows} listHref={listHref} />
-      <Row align="flex-end" gap={4}>
-        <Stack grow>
-          <TextField label="Find a cable" hint="Reference or painted mark" value={typed} onChange={setTyped} autoComplete="off" />
-        </Stack>
-        <Checkbox label="Only those to measure" value={onlyToMeasure} onChange={setOnlyToMeasure} />
-      </Row>
+      {typed === '' ? <ChecklistElevation survey={survey} rows={rows} listHref={listHref} /> : null}
+      <Columns shares={[3, 1]} gap={2}>
+        {[
+          <TextField
+            key="find"
+            label="Find a cable by its reference or painted mark"
+            value={typed}
+            onChange={setTyped}
+            autoComplete="off"
+          />,
+          <Stack key="filter" gap={0}>
+            {wide ? <Text size="note"> </Text> : null}
+            <Checkbox label="Only those to measure" value={onlyToMeasure} onChange={setOnlyToMeasure} />
+          </Stack>,
+        ]}
+      </Columns>
       {found.length === 0 ? (
         <Empty>{typed === '' ? 'Nothing is left to measure.' : `No cable of the campaign is called or marked “${typed}”.`}</Empty>
       ) : (
         <ChecklistList survey={survey} rows={found} drafted={drafted} hrefOf={hrefOf} />
       )}
-      <Caution unchecked site conditions={conditionsOf(survey)} />
+      <Caution unchecked site conditions={conditionsOf(survey, units)} />
       {engineer ? <SaveEstimates survey={survey} rows={rows} /> : null}
       <CampaignFacts survey={survey} editHref={engineer ? `${listHref}/edit` : null} />
     </Page>
   );
 }
 
-function conditionsOf({ steelTemperature, traffic }: CampaignDetail): string {
-  const temperature = steelTemperature === null ? 'Steel temperature not stated for the campaign' : `Averages at ${steelTemperature} °C`;
+function conditionsOf({ steelTemperature, traffic }: CampaignDetail, units: Units): string {
+  const temperature =
+    steelTemperature === null
+      ? 'Steel temperature not stated for the campaign'
+      : `Averages at ${units.show(steelTemperature, 'temperature')}`;
   return `${temperature}${traffic ? `, traffic: ${traffic}` : ''}.`;
 }

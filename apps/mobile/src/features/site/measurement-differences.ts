@@ -36,6 +36,8 @@ function inWords(entry: PutMeasurement | Measurement, units: Units): Map<string,
 }
 
 function peakWords({ frequency, standardUncertainty, used, setAsideReason }: ModalPeak): string {
-  const uncertainty = standardUncertainty === null ? '' : ` \u00B1 ${standardUncertainty}`;
-  return `${frequency}${uncertainty} Hz${used ? '' : ` (${setAsideReason})`}`;
+  // Nine figures are more than anybody types, and hide the noise of binary fractions.
+  const plain = (value: number) => String(Number(value.toPrecision(9)));
+  const uncertainty = standardUncertainty === null ? '' : ` \u00B1 ${plain(standardUncertainty)}`;
+  return `${plain(frequency)}${uncertainty} Hz${used ? '' : ` (${setAsideReason})`}`;
 }

@@ -5,7 +5,7 @@ import { type EntryDraft, isBlank, modeOf, type PeakDraft } from './entry-draft.
 /** Another numbering of the same rows; null: the peak belongs to something else. */
 export interface Renumbering {
   modes: Record<string, number | null>;
-  /** "1 → 2, 2 → 3, 3 → foreign" */
+  /** "1 as 2, 2 as 3, 3 as foreign" */
   words: string;
   /** N; null where it cannot be said. */
   tension: number | null;
@@ -47,13 +47,18 @@ export function numberingFindings(draft: EntryDraft, { section, span, tension }:
     const best = audit.alternatives[0];
     return {
       fits: !doubtful && audit.typedRank === 0 && best ? oddsInWords(best.tensionProbability) : null,
-      notes: audit.notes.filter(({ code }) => !saidElsewhere.includes(code)).map(({ message }) => message),
+      notes: audit.notes.filter(({ code }) => !saidElsewhere.includes(code)).map(noteWords),
       alternatives: doubtful ? renumberings(rows, audit.alternatives) : [],
     };
   } catch (error) {
     if (error instanceof EstimationError) return null;
     throw error;
   }
+}
+
+/** The other numbering itself stands on the button that takes it. */
+function noteWords({ code, message }: { code: string; message: string }): string {
+  return code === 'numbering-doubtful' ? 'Another numbering fits these frequencies much better. Check the order of the peaks.' : message;
 }
 
 /** The plane with more peaks; rows that cannot be read, or were set aside, say nothing. */
@@ -71,7 +76,7 @@ function renumberings(rows: readonly PeakDraft[], alternatives: readonly ModeNum
     return [
       {
         modes: Object.fromEntries(changed.map(({ row, mode }) => [row.id, mode])),
-        words: changed.map(({ row, mode }) => `${modeOf(row)} → ${mode ?? 'foreign'}`).join(', '),
+        words: changed.map(({ row, mode }) => `${modeOf(row)} as ${mode ?? 'foreign'}`).join(', '),
         tension,
         odds: oddsInWords(probability),
       },
