@@ -11,7 +11,6 @@ import { sisterFrequencies, sisterOf } from '../../../apps/mobile/src/features/s
 import { overlaySurvey } from '../../../apps/mobile/src/features/site/survey-overlay.ts';
 import { instantText, readInstant } from '../../../apps/mobile/src/features/site/visit-time.ts';
 import type { OutboxEntry } from '../../../apps/mobile/src/lib/outbox-state.ts';
-import type { Units } from '../../../apps/mobile/src/lib/units.tsx';
 import { cableNamed, campaignOf, designTension, entryOf, frequencies, peaksAt, visitTo } from './surveyed-cable.ts';
 
 const measured = entryOf(cableNamed('W-01u', { references: [designTension(2.5e6)] }), { measurements: [visitTo('span W-01u')] });
@@ -20,8 +19,8 @@ const excused = entryOf(cableNamed('W-03u'), { notMeasuredReason: 'no access' })
 const survey = campaignOf([measured, waiting, excused]);
 
 function waitingEntry(path: string, body: unknown): OutboxEntry {
-  const request = { id: path, userId: 'ida', key: path, method: 'PUT', path, body, subject: '', refreshes: [] } as const;
-  return { ...request, queuedAt: '', state: 'waiting', attempts: 0, refusal: null };
+  const request = { id: path, userId: 'ida', key: path, path, body, subject: '', refreshes: [] };
+  return { ...request, method: 'PUT', queuedAt: '', state: 'waiting', attempts: 0, refusal: null };
 }
 
 test('each cable is measured, to measure, or left out with a reason', () => {
@@ -107,10 +106,9 @@ test('the sister stands across the structure; without coordinates the reference 
 });
 
 test('two versions of a measurement are told apart in words, peak by peak', () => {
-  const units = { show: (si: number | null) => String(si) } as Units;
   const mine = visitTo('s', { note: 'mine', peaks: peaksAt([1.505, 3.012]) });
   const theirs = visitTo('s', { note: '', peaks: peaksAt([1.505, 3.02]), lowerDamperState: 'leaking' });
-  expect(differencesOf(mine, theirs, units)).toEqual([
+  expect(differencesOf(mine, theirs, String)).toEqual([
     { what: 'Mode 2, in plane', mine: '3.012 Hz', theirs: '3.02 Hz' },
     { what: 'Lower damper', mine: 'none', theirs: 'leaking' },
     { what: 'Note', mine: 'mine', theirs: '–' },

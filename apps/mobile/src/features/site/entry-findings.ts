@@ -1,9 +1,9 @@
 import type { ModalPeak, Section, Span } from '@strandnote/api/contract';
 import { type EstimateNote, freeLength, massPerLength, type PlausibilityQuestion, questionPlausibility } from '@strandnote/core';
-import type { Units } from '../../lib/units.tsx';
 import { checkEntry, type EntryProblems, usablePeaks } from './check-entry.ts';
 import { type EntryDraft, isBlank, modeOf, type PeakDraft } from './entry-draft.ts';
 import { estimateSpan, fitOrder, type Outcome } from './live-estimate.ts';
+import type { ShowQuantity } from './show-quantity.ts';
 
 /** Everything that is said of a draft while it is typed. */
 export interface EntryFindings {
@@ -22,10 +22,10 @@ interface Surroundings {
   section: Section;
   span: Span;
   timeZone: string;
-  units: Units;
+  show: ShowQuantity;
 }
 
-export function findingsOf(draft: EntryDraft, { section, span, timeZone, units }: Surroundings): EntryFindings {
+export function findingsOf(draft: EntryDraft, { section, span, timeZone, show }: Surroundings): EntryFindings {
   const problems = checkEntry(draft, { span, timeZone });
   const peaks = fitOrder(usablePeaks(draft, problems.peaks));
   const { lowerDamper, upperDamper, crossTied } = draft.visit;
@@ -38,7 +38,7 @@ export function findingsOf(draft: EntryDraft, { section, span, timeZone, units }
   const outcome = peaks.length === 0 ? null : estimateSpan(section, span, visit, peaks);
   // Read by whoever measures how long a keystroke waits for the tension.
   if (outcome) performance.measure('strandnote.estimate', { start: started, end: performance.now() });
-  const questions = questionsOf(draft, section, span, units);
+  const questions = questionsOf(draft, section, span, show);
   const fitNotes = outcome?.output?.warnings ?? [];
   return {
     problems: withProblemOfFit(problems, outcome),
@@ -96,7 +96,7 @@ function unanswered({ visit }: EntryDraft, span: Span): EntryFindings['notes'] {
   ];
 }
 
-function questionsOf(draft: EntryDraft, section: Section, span: Span, units: Units) {
+function questionsOf(draft: EntryDraft, section: Section, span: Span, show: ShowQuantity) {
   const rows = draft.peaks.filter((peak) => peak.used && peak.frequency.si !== null && modeOf(peak) !== null);
   const cable = {
     length: freeLength(span).length,
@@ -112,7 +112,7 @@ function questionsOf(draft: EntryDraft, section: Section, span: Span, units: Uni
   for (const question of asked) {
     const row = rowOf(question, rows);
     if (row) byRow.set(row.id, question.message);
-    else general.push({ severity: 'caution', message: inUnits(question, cable, units) });
+    else general.push({ severity: 'caution', message: inUnits(question, cable, show) });
   }
   return { byRow, general };
 }
@@ -123,13 +123,13 @@ function rowOf({ field }: PlausibilityQuestion, rows: readonly PeakDraft[]): Pea
 }
 
 /** The core speaks SI; the person reads their own units. */
-function inUnits({ code, message }: PlausibilityQuestion, cable: { length: number; massPerLength: number }, units: Units): string {
+function inUnits({ code, message }: PlausibilityQuestion, cable: { length: number; massPerLength: number }, show: ShowQuantity): string {
   if (code === 'length-looks-like-mm' || code === 'length-unusual') {
-    const length = units.show(cable.length, 'length', 1);
+    const length = show(cable.length, 'length', 1);
     return `The free length in the registry is ${length}, which is ${cable.length > 1 ? 'longer than any stay' : 'very short'}. Was it typed in another unit?`;
   }
   if (code === 'mass-unusual') {
-    return `The mass in the registry is ${units.show(cable.massPerLength, 'mass-per-length')}, which cables do not have. Was it typed in another unit?`;
+    return `The mass in the registry is ${show(cable.massPerLength, 'mass-per-length')}, which cables do not have. Was it typed in another unit?`;
   }
   return message;
 }

@@ -1,5 +1,5 @@
 import type { Measurement, ModalPeak, PutMeasurement } from '@strandnote/api/contract';
-import type { Units } from '../../lib/units.tsx';
+import type { ShowQuantity } from './show-quantity.ts';
 import { dampingWords, excitationWords, planeWords } from './site-words.ts';
 
 /** One thing that two people entered differently, in words. */
@@ -10,15 +10,15 @@ export interface Difference {
 }
 
 /** Where two versions of a measurement differ, peak by peak and answer by answer. */
-export function differencesOf(mine: PutMeasurement, theirs: Measurement, units: Units): Difference[] {
-  const [left, right] = [inWords(mine, units), inWords(theirs, units)];
+export function differencesOf(mine: PutMeasurement, theirs: Measurement, show: ShowQuantity): Difference[] {
+  const [left, right] = [inWords(mine, show), inWords(theirs, show)];
   const keys = [...new Set([...left.keys(), ...right.keys()])];
   return keys
     .map((what) => ({ what, mine: left.get(what) ?? '–', theirs: right.get(what) ?? '–' }))
     .filter((difference) => difference.mine !== difference.theirs);
 }
 
-function inWords(entry: PutMeasurement | Measurement, units: Units): Map<string, string> {
+function inWords(entry: PutMeasurement | Measurement, show: ShowQuantity): Map<string, string> {
   const peaks = entry.peaks
     .toSorted((a, b) => a.mode - b.mode || a.plane.localeCompare(b.plane))
     .map((peak) => [`Mode ${peak.mode}, ${planeWords[peak.plane]}${peak.used ? '' : ', set aside'}`, peakWords(peak)] as const);
@@ -29,8 +29,8 @@ function inWords(entry: PutMeasurement | Measurement, units: Units): Map<string,
     ['Bushing', dampingWords[entry.bushingState]],
     ['Tied to another cable', entry.crossTied ? 'yes' : 'no'],
     ['Excitation', excitationWords[entry.excitation]],
-    ['Sensor from the lower end', units.show(entry.sensorPosition, 'length')],
-    ['Steel temperature', units.show(entry.steelTemperature, 'temperature', 1)],
+    ['Sensor from the lower end', show(entry.sensorPosition, 'length')],
+    ['Steel temperature', show(entry.steelTemperature, 'temperature', 1)],
     ['Note', entry.note || '–'],
   ]);
 }

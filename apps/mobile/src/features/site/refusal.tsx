@@ -87,7 +87,7 @@ function Conflict({ mine, measurementId, stored, onReload, onKeepMine, onTakeThe
 }
 
 function useDifferences(mine: PutMeasurement, theirs: Measurement | null, units: Units): Difference[] {
-  return useMemo(() => (theirs ? differencesOf(mine, theirs, units) : []), [mine, theirs, units]);
+  return useMemo(() => (theirs ? differencesOf(mine, theirs, units.show) : []), [mine, theirs, units]);
 }
 
 function findMeasurement({ cables }: CampaignDetail, id: string): Measurement | null {

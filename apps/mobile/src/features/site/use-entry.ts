@@ -24,8 +24,7 @@ export type Entry = ReturnType<typeof useEntry>;
 
 /** A measurement while it is typed, with all that the device can say of it at once. */
 export function useEntry({ survey, row, measurement }: EntryPlace) {
-  const units = useUnits();
-  const { system } = units;
+  const { system, show } = useUnits();
   const me = useMeQuery();
   const timeZone = survey.structureTimeZone;
   const { span, entry } = row;
@@ -37,8 +36,8 @@ export function useEntry({ survey, row, measurement }: EntryPlace) {
   );
   const { draft } = kept;
   const findings = useMemo(
-    () => (draft ? findingsOf(draft, { section: entry.cable.section, span, timeZone, units }) : null),
-    [draft, entry.cable.section, span, timeZone, units],
+    () => (draft ? findingsOf(draft, { section: entry.cable.section, span, timeZone, show }) : null),
+    [draft, entry.cable.section, span, timeZone, show],
   );
   return {
     ...kept,
