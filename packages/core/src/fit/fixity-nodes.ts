@@ -1,7 +1,7 @@
 /**
  * Nodes of the quadrature over what is not known of the ends.
  *
- * Two ends of one unknown fixity are a mixture: half "both alike" on the diagonal, half "each on its own" on a product grid.
+ * Two ends of one unknown fixity are a mixture: 60 % "both alike" on the diagonal, 40 % "each on its own" on a product grid.
  * Assuming alike ends alone covers too little when they differ on short cables; assuming independent ends alone covers too
  * little when they are alike. A known end collapses its axis to one node.
  *
@@ -78,6 +78,12 @@ export function isKnownEnd(end: EndCondition): boolean {
 }
 
 /**
+ * Prior share of ends that are alike: with a half, intervals of cables of ξ 20–50 whose ends were alike held the tension in 91.9 %
+ * of 2400 simulated cases, with this share in more than 92 %, and no group of unlike ends suffered.
+ */
+const alikeShare = 0.6;
+
+/**
  * The quadrature of a pair of ends.
  *
  * @param ends conditions of both ends
@@ -100,10 +106,12 @@ export function fixityNodes(ends: readonly [EndCondition, EndCondition], sharp: 
   const grid = own.nodes.flatMap((u, i) => own.nodes.map((v, j) => ({ u, v, i, j, share: own.weights[i]! * own.weights[j]! })));
   const [a, b] = [fixityRange(first)!, fixityRange(second)!];
   if (a[0] !== b[0] || a[1] !== b[1]) return grid.map(({ u, v, share }) => at(u, v, share));
-  const diagonal = alike.nodes.map((u, i) => at(u, u, 0.5 * alike.weights[i]!));
-  if (!symmetric) return [...diagonal, ...grid.map(({ u, v, share }) => at(u, v, 0.5 * share))];
+  const diagonal = alike.nodes.map((u, i) => at(u, u, alikeShare * alike.weights[i]!));
+  if (!symmetric) return [...diagonal, ...grid.map(({ u, v, share }) => at(u, v, (1 - alikeShare) * share))];
   // Half the grid, off-diagonal shares doubled.
-  const folded = grid.filter(({ i, j }) => i <= j).map(({ u, v, i, j, share }) => at(u, v, i === j ? 0.5 * share : share, i !== j));
+  const folded = grid
+    .filter(({ i, j }) => i <= j)
+    .map(({ u, v, i, j, share }) => at(u, v, (i === j ? 1 : 2) * (1 - alikeShare) * share, i !== j));
   return [...diagonal, ...folded];
 }
 
