@@ -24,6 +24,8 @@ interface EntryMainProps extends EntryViewProps {
   saving: SaveEntry;
   neighbours: { previous: ChecklistRow | null; following: ChecklistRow | null };
   hrefOf: (row: ChecklistRow) => string;
+  /** A reason was saved why the cable is not measured. */
+  onExcused: () => void;
 }
 
 /** Result, peaks and visit of one cable: one under the other on a phone, side by side on a wide screen. */
@@ -103,9 +105,7 @@ export function EntryMain(props: EntryMainProps) {
           {foot}
         </>
       )}
-      {excusing ? (
-        <NotMeasuredSheet row={row} campaignId={survey.id} onClose={() => setExcusing(false)} onSaved={() => setExcusing(false)} />
-      ) : null}
+      {excusing ? <NotMeasuredSheet row={row} campaignId={survey.id} onClose={() => setExcusing(false)} onSaved={props.onExcused} /> : null}
     </Stack>
   );
 }

@@ -66,6 +66,7 @@ export function EntryView(props: EntryViewProps) {
           survey={survey}
           filled={filled}
           typed={entry.typed}
+          excused={row.entry.notMeasuredReason !== null}
           saving={saving}
           next={next}
           nextHref={next ? hrefOf(next) : listHref}

@@ -1,5 +1,5 @@
 import { memo, useState } from 'react';
-import { View } from 'react-native';
+import { useWindowDimensions, View } from 'react-native';
 import { StringFigure } from '../../drawings/index.ts';
 import { formatNumber } from '../../lib/display-units.ts';
 import { space } from '../../theme/tokens.ts';
@@ -33,6 +33,9 @@ export interface PeakRowProps {
 export const PeakRow = memo(function PeakRow(props: PeakRowProps) {
   const { peak, problems, question, sensor, dispatch } = props;
   const wide = useWide();
+  // On the narrowest phones the figure gives way to the number.
+  const { width } = useWindowDimensions();
+  const figureWidth = wide ? 140 : Math.max(36, Math.min(96, width - 282));
   const [opened, setOpened] = useState(false);
   const [typing, setTyping] = useState(false);
   const mode = modeOf(peak);
@@ -46,13 +49,13 @@ export const PeakRow = memo(function PeakRow(props: PeakRowProps) {
         <View style={{ flex: 1, minWidth: 0 }}>
           <Touchable label={`${name}: number, plane, uncertainty, set aside`} onPress={() => setOpened(!open)}>
             <Row wrap={false} gap={3}>
-              <View style={{ width: 30 }}>
+              <View style={{ width: 28 }}>
                 <Text figures strong size="heading" tone={shown?.mode ? 'minium' : peak.used ? 'ink' : 'muted'}>
                   {peak.mode.trim() || '?'}
                 </Text>
               </View>
               {mode !== null && mode >= 1 && mode <= 60 ? (
-                <StringFigure mode={mode} sensor={sensor} width={wide ? 140 : 96} height={30} />
+                <StringFigure mode={mode} sensor={sensor} width={figureWidth} height={30} />
               ) : null}
             </Row>
           </Touchable>

@@ -164,7 +164,6 @@ function PasteSheet({ draft, dispatch, onClose }: Pick<PeaksPanelProps, 'draft' 
           value={text}
           onChange={setText}
           rows={8}
-          figures
         />
       </Stack>
     </Sheet>

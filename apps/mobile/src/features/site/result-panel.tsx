@@ -1,3 +1,4 @@
+import type { CampaignDetail } from '@strandnote/api/contract';
 import { formatInterval, formatWithUncertainty } from '@strandnote/core';
 import { sharedScale } from '@strandnote/core/drawing';
 import type { StoredEstimate, Zone } from '@strandnote/core/report-content';
@@ -11,11 +12,9 @@ import type { EntryFindings } from './entry-findings.ts';
 import { referenceWords } from './site-words.ts';
 import { agreedInWords, decideSpan, type SurveyDecision } from './survey-decision.ts';
 
-type Basis = Parameters<typeof agreedInWords>[0];
-
 interface ResultProps {
   row: ChecklistRow;
-  campaign: Basis;
+  campaign: CampaignDetail;
   findings: EntryFindings;
 }
 
@@ -135,6 +134,11 @@ export function ResultNotes({ row, campaign, findings }: ResultProps) {
         <Text size="note" tone="muted">
           {decision.reason}
         </Text>
+      ) : null}
+      {decision.zone === 'outside' && campaign.basis.criticalContact ? (
+        <Notice kind="problem" title="Outside the agreed limits">
+          <Text>{`Check length, mass and mode numbers. If it stands, call at once, as agreed: ${campaign.basis.criticalContact}.`}</Text>
+        </Notice>
       ) : null}
       {serious.length > 0 ? (
         <Notice kind="caution" title={serious.length === 1 ? 'Look at this before you leave' : 'Look at these before you leave'} alert>

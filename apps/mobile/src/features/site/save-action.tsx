@@ -10,16 +10,18 @@ interface SaveActionProps {
   filled: boolean;
   /** Changed since it was saved. */
   typed: boolean;
+  /** Left out of the survey with a reason. */
+  excused: boolean;
   saving: SaveEntry;
   next: ChecklistRow | null;
   nextHref: string;
 }
 
 /** The one main action: it saves, and goes where work waits. */
-export function SaveAction({ survey, filled, typed, saving, next, nextHref }: SaveActionProps) {
+export function SaveAction({ survey, filled, typed, excused, saving, next, nextHref }: SaveActionProps) {
   const firm = useFirm();
   const destination = next ? next.name : 'the list';
-  if (!typed && filled) {
+  if (!typed && (filled || excused)) {
     return (
       <Button kind="primary" href={nextHref}>
         {`Go to ${destination}`}

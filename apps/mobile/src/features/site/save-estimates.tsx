@@ -22,11 +22,7 @@ export function SaveEstimates({ survey, rows }: { survey: CampaignDetail; rows: 
       <Heading level={2} size="lead">
         Estimates and report
       </Heading>
-      <Text>
-        {unsaved === 0
-          ? `${measured.length} tensions are kept on the server with their inputs.`
-          : `${unsaved} of ${measured.length} tensions were computed on this device only. The server computes them again and keeps its own.`}
-      </Text>
+      <Text>{keptWords(measured.length, unsaved)}</Text>
       <Row align="flex-start">
         <Button onPress={() => save.mutate(null, { onSuccess: setSaved })} busy={save.isPending} why={why}>
           Save estimates
@@ -39,6 +35,12 @@ export function SaveEstimates({ survey, rows }: { survey: CampaignDetail; rows: 
       {saved ? <Saved saved={saved} rows={rows} listHref={`/${firm.firmId}/site/${survey.id}`} /> : null}
     </Panel>
   );
+}
+
+function keptWords(measured: number, unsaved: number): string {
+  if (measured === 0) return 'What is measured is computed again by the server and kept; a report starts from that.';
+  if (unsaved === 0) return `All ${measured} tensions are kept on the server with their inputs.`;
+  return `${unsaved} of ${measured} tensions were computed on this device only. The server computes them again and keeps its own.`;
 }
 
 function whyNot({

@@ -2,7 +2,8 @@ import type { PutMeasurement } from '@strandnote/api/contract';
 import { useCallback, useEffect, useState } from 'react';
 import { useFirm, useMeQuery } from '../../lib/session.tsx';
 import { hasProblems } from './check-entry.ts';
-import { saveMeasurement } from './entry-store.ts';
+import type { ChecklistRow } from './checklist-rows.ts';
+import { saveMeasurement, saveReason } from './entry-store.ts';
 import { measurementBody } from './measurement-body.ts';
 import type { Entry, EntryPlace } from './use-entry.ts';
 
@@ -25,6 +26,8 @@ export function useSaveEntry({ survey, row }: EntryPlace, entry: Entry, onSaved:
       const entered = { campaignId: survey.id, measurementId: draft.measurementId, cableName: row.name, body };
       try {
         await saveMeasurement({ firmId: firm.firmId, userId, name }, entered);
+        // A cable that was measured after all no longer needs its excuse.
+        if (row.entry.notMeasuredReason !== null) await saveReason({ firmId: firm.firmId, userId }, withoutReason(survey.id, row));
         await forget();
         onSaved();
       } catch (error) {
@@ -32,7 +35,7 @@ export function useSaveEntry({ survey, row }: EntryPlace, entry: Entry, onSaved:
         setFailure('This browser did not let it be kept on the device. Leave the page open, and free some storage.');
       }
     },
-    [me.data, draft, survey.id, row.name, firm.firmId, forget, onSaved],
+    [me.data, draft, survey.id, row, firm.firmId, forget, onSaved],
   );
   const save = async () => {
     if (!draft || !findings) return;
@@ -40,6 +43,10 @@ export function useSaveEntry({ survey, row }: EntryPlace, entry: Entry, onSaved:
     else await send(measurementBody(draft, row.span, timeZone));
   };
   return { save, send, tried: tried > 0, failure };
+}
+
+function withoutReason(campaignId: string, { entry: { cable } }: ChecklistRow) {
+  return { campaignId, cableId: cable.id, cableName: cable.reference, reason: null };
 }
 
 /** Whoever pressed the button stands at the foot of the page; what is to be mended may be far above. */
