@@ -1,9 +1,14 @@
-import { index, integer, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { sql } from 'drizzle-orm';
+import { check, index, integer, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { structures } from './structures.ts';
-import { moment, si, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+import { moment, notNegative, oneOf, positive, si, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
 
-type PropertySource = 'weighed' | 'supplier' | 'as-built' | 'design' | 'taped' | 'assumed';
-const source = (name: string) => text(name).notNull().$type<PropertySource>();
+export const propertySources = ['weighed', 'supplier', 'as-built', 'design', 'taped', 'assumed'] as const;
+export const cableKinds = ['stay', 'hanger', 'external-tendon', 'tie-rod', 'guy'] as const;
+export const damperFittings = ['none', 'fitted'] as const;
+export const referenceKinds = ['design', 'lift-off', 'load-cell', 'last-survey', 'sister'] as const;
+export const referencePlaces = ['mean-chord', 'lower-end', 'upper-end'] as const;
+const source = (name: string) => text(name).notNull().$type<(typeof propertySources)[number]>();
 
 export const sections = pgTable(
   'sections',
@@ -28,7 +33,22 @@ export const sections = pgTable(
     breakingLoadSource: source('breaking_load_source'),
     createdAt: moment('created_at').notNull().defaultNow(),
   },
-  (table) => [tenantKey(table), withinFirm(table, table.structureId, structures, 'sections_structure')],
+  (table) => [
+    tenantKey(table),
+    index('sections_by_structure').on(table.firmId, table.structureId),
+    withinFirm(table, table.structureId, structures, 'sections_structure'),
+    oneOf(table.modulusSource, propertySources),
+    oneOf(table.steelMassSource, propertySources),
+    oneOf(table.addedMassSource, propertySources),
+    oneOf(table.breakingLoadSource, propertySources),
+    positive('sections_positive', table.steelArea, table.modulus, table.steelMass, table.bendingStiffnessLow, table.breakingLoad),
+    positive('sections_uncertainty_is_never_zero', table.massRelativeUncertainty),
+    notNegative('sections_not_negative', table.sheathMass, table.groutMass),
+    check(
+      'sections_bounds_in_order',
+      sql`${table.bendingStiffnessLow} <= ${table.bendingStiffnessHigh} and ${table.bendingStiffnessHigh} < 'Infinity'`,
+    ),
+  ],
 );
 
 export interface StoredPoint {
@@ -46,7 +66,7 @@ export const cables = pgTable(
     reference: text('reference').notNull(),
     ownerReference: text('owner_reference').notNull().default(''),
     paintedMark: text('painted_mark').notNull().default(''),
-    kind: text('kind').notNull().$type<'stay' | 'hanger' | 'external-tendon' | 'tie-rod' | 'guy'>(),
+    kind: text('kind').notNull().$type<(typeof cableKinds)[number]>(),
     position: integer('position').notNull(),
     lowerAnchor: jsonb('lower_anchor').$type<StoredPoint>(),
     upperAnchor: jsonb('upper_anchor').$type<StoredPoint>(),
@@ -58,6 +78,7 @@ export const cables = pgTable(
     unique('cables_reference').on(table.firmId, table.structureId, table.reference),
     withinFirm(table, table.structureId, structures, 'cables_structure'),
     withinFirm(table, table.sectionId, sections, 'cables_section'),
+    oneOf(table.kind, cableKinds),
   ],
 );
 
@@ -84,8 +105,8 @@ export const spans = pgTable(
     inclination: si('inclination').notNull(),
     lowerEnd: jsonb('lower_end').notNull().$type<StoredSpanEnd>(),
     upperEnd: jsonb('upper_end').notNull().$type<StoredSpanEnd>(),
-    lowerDamper: text('lower_damper').notNull().$type<'none' | 'fitted'>(),
-    upperDamper: text('upper_damper').notNull().$type<'none' | 'fitted'>(),
+    lowerDamper: text('lower_damper').notNull().$type<(typeof damperFittings)[number]>(),
+    upperDamper: text('upper_damper').notNull().$type<(typeof damperFittings)[number]>(),
     damperPosition: si('damper_position'),
     /** A span that a later drawing no longer shows; its measurements stay. */
     retiredAt: moment('retired_at'),
@@ -94,6 +115,17 @@ export const spans = pgTable(
     tenantKey(table),
     index('spans_by_cable').on(table.firmId, table.cableId),
     withinFirm(table, table.cableId, cables, 'spans_cable'),
+    oneOf(table.chordLengthSource, propertySources),
+    oneOf(table.deductionSource, propertySources),
+    oneOf(table.lowerDamper, damperFittings),
+    oneOf(table.upperDamper, damperFittings),
+    positive('spans_tolerances_are_never_zero', table.chordLengthTolerance, table.lowerDeductionTolerance, table.upperDeductionTolerance),
+    notNegative('spans_not_negative', table.lowerDeduction, table.upperDeduction, table.inclination),
+    positive('spans_damper_position_positive', table.damperPosition),
+    check(
+      'spans_leave_a_free_length',
+      sql`${table.chordLength} - ${table.lowerDeduction} - ${table.upperDeduction} > 0 and ${table.chordLength} < 'Infinity'`,
+    ),
   ],
 );
 
@@ -102,9 +134,9 @@ export const referenceTensions = pgTable(
   {
     ...tenantColumns,
     cableId: uuid('cable_id').notNull(),
-    kind: text('kind').notNull().$type<'design' | 'lift-off' | 'load-cell' | 'last-survey' | 'sister'>(),
+    kind: text('kind').notNull().$type<(typeof referenceKinds)[number]>(),
     stage: text('stage').notNull(),
-    place: text('place').notNull().$type<'mean-chord' | 'lower-end' | 'upper-end'>(),
+    place: text('place').notNull().$type<(typeof referencePlaces)[number]>(),
     value: si('value').notNull(),
     relativeUncertainty: si('relative_uncertainty'),
     source: text('source').notNull(),
@@ -116,5 +148,9 @@ export const referenceTensions = pgTable(
     tenantKey(table),
     index('reference_tensions_by_cable').on(table.firmId, table.cableId),
     withinFirm(table, table.cableId, cables, 'reference_tensions_cable'),
+    oneOf(table.kind, referenceKinds),
+    oneOf(table.place, referencePlaces),
+    positive('reference_tensions_positive', table.value),
+    notNegative('reference_tensions_not_negative', table.relativeUncertainty),
   ],
 );

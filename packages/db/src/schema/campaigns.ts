@@ -1,7 +1,8 @@
-import { index, integer, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
-import { cables } from './cables.ts';
+import { sql } from 'drizzle-orm';
+import { check, index, integer, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { cables, type referenceKinds } from './cables.ts';
 import { structures } from './structures.ts';
-import { moment, si, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+import { moment, oneOf, si, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
 
 export interface StoredInstrument {
   name: string;
@@ -11,12 +12,14 @@ export interface StoredInstrument {
 }
 
 export interface StoredBasis {
-  referenceKind: 'design' | 'lift-off' | 'load-cell' | 'last-survey' | 'sister' | null;
+  referenceKind: (typeof referenceKinds)[number] | null;
   lowerLimit: number | null;
   upperLimit: number | null;
   decisionRule: string;
   criticalContact: string;
 }
+
+export const campaignStates = ['open', 'closed'] as const;
 
 export const campaigns = pgTable(
   'campaigns',
@@ -35,13 +38,17 @@ export const campaigns = pgTable(
     traffic: text('traffic').notNull().default(''),
     stage: text('stage').notNull(),
     basis: jsonb('basis').notNull().$type<StoredBasis>(),
-    state: text('state').notNull().default('open').$type<'open' | 'closed'>(),
+    state: text('state').notNull().default('open').$type<(typeof campaignStates)[number]>(),
     createdAt: moment('created_at').notNull().defaultNow(),
   },
   (table) => [
     tenantKey(table),
     unique('campaigns_number').on(table.firmId, table.structureId, table.number),
     withinFirm(table, table.structureId, structures, 'campaigns_structure'),
+    oneOf(table.state, campaignStates),
+    check('campaigns_number_from_one', sql`${table.number} >= 1`),
+    // Days as text compare like days.
+    check('campaigns_days_in_order', sql`${table.startsOn} ~ '^\\d{4}-\\d\\d-\\d\\d$' and ${table.endsOn} >= ${table.startsOn}`),
   ],
 );
 

@@ -3,7 +3,7 @@ import { index, jsonb, pgTable, text, uuid } from 'drizzle-orm/pg-core';
 import { spans } from './cables.ts';
 import { campaigns } from './campaigns.ts';
 import { measurements } from './measurements.ts';
-import { moment, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+import { isSha256, moment, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
 
 /** The result of one fit; append-only. */
 export const estimates = pgTable(
@@ -26,6 +26,8 @@ export const estimates = pgTable(
     index('estimates_by_span').on(table.firmId, table.spanId, table.createdAt),
     withinFirm(table, table.measurementId, measurements, 'estimates_measurement'),
     withinFirm(table, table.spanId, spans, 'estimates_span'),
+    index('estimates_by_campaign').on(table.firmId, table.campaignId),
     withinFirm(table, table.campaignId, campaigns, 'estimates_campaign'),
+    isSha256(table.inputSha256),
   ],
 );

@@ -1,12 +1,29 @@
-import { boolean, index, integer, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
+import { sql } from 'drizzle-orm';
+import { type AnyPgColumn, boolean, check, index, integer, jsonb, pgTable, text, unique, uuid } from 'drizzle-orm/pg-core';
 import { clients } from './clients.ts';
-import { moment, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+import { isSha256, moment, oneOf, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
 
 export interface StoredLetterhead {
   addressLines: string[];
   phone: string;
   email: string;
   registration: string;
+}
+
+export const memberRoles = ['admin', 'engineer', 'checker', 'client'] as const;
+export const unitSystems = ['si', 'us'] as const;
+
+/**
+ * Row-level security tells clients from staff by their organisation: the role of client stands alone and names one, and no other
+ * role does.
+ */
+function clientStandsAlone(name: string, { roles, clientId }: { roles: AnyPgColumn; clientId: AnyPgColumn }) {
+  const known = sql.raw(`array[${memberRoles.map((role) => `'${role}'`).join(', ')}]`);
+  return check(
+    name,
+    sql`cardinality(${roles}) >= 1 and ${roles} <@ ${known} and case when 'client' = any(${roles})
+      then cardinality(${roles}) = 1 and ${clientId} is not null else ${clientId} is null end`,
+  );
 }
 
 /** A firm is its own tenant: its id is the firm of its row. */
@@ -29,12 +46,12 @@ export const members = pgTable(
     userId: text('user_id').notNull(),
     name: text('name').notNull(),
     email: text('email').notNull(),
-    roles: text('roles').array().notNull().$type<('admin' | 'engineer' | 'checker' | 'client')[]>(),
+    roles: text('roles').array().notNull().$type<(typeof memberRoles)[number][]>(),
     clientId: uuid('client_id'),
     licenceNumber: text('licence_number').notNull().default(''),
     licenceJurisdiction: text('licence_jurisdiction').notNull().default(''),
     active: boolean('active').notNull().default(true),
-    units: text('units').notNull().default('si').$type<'si' | 'us'>(),
+    units: text('units').notNull().default('si').$type<(typeof unitSystems)[number]>(),
     createdAt: moment('created_at').notNull().defaultNow(),
   },
   (table) => [
@@ -42,6 +59,8 @@ export const members = pgTable(
     unique('members_user').on(table.firmId, table.userId),
     index('members_by_user').on(table.userId),
     withinFirm(table, table.clientId, clients, 'members_client'),
+    clientStandsAlone('members_client_stands_alone', table),
+    oneOf(table.units, unitSystems),
   ],
 );
 
@@ -51,7 +70,7 @@ export const invitations = pgTable(
     ...tenantColumns,
     name: text('name').notNull(),
     email: text('email').notNull(),
-    roles: text('roles').array().notNull().$type<('admin' | 'engineer' | 'checker' | 'client')[]>(),
+    roles: text('roles').array().notNull().$type<(typeof memberRoles)[number][]>(),
     clientId: uuid('client_id'),
     tokenSha256: text('token_sha256').notNull().unique(),
     expiresAt: moment('expires_at').notNull(),
@@ -60,5 +79,10 @@ export const invitations = pgTable(
     invitedBy: text('invited_by').notNull(),
     createdAt: moment('created_at').notNull().defaultNow(),
   },
-  (table) => [tenantKey(table), withinFirm(table, table.clientId, clients, 'invitations_client')],
+  (table) => [
+    tenantKey(table),
+    withinFirm(table, table.clientId, clients, 'invitations_client'),
+    clientStandsAlone('invitations_client_stands_alone', table),
+    isSha256(table.tokenSha256),
+  ],
 );

@@ -1,10 +1,14 @@
-import { boolean, index, integer, pgTable, text, uuid } from 'drizzle-orm/pg-core';
+import { sql } from 'drizzle-orm';
+import { boolean, check, index, integer, pgTable, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
 import { spans } from './cables.ts';
 import { campaigns } from './campaigns.ts';
-import { moment, si, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+import { moment, notNegative, oneOf, positive, si, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
 
-type DampingState = 'none' | 'connected' | 'disconnected' | 'locked' | 'leaking';
-const dampingState = (name: string) => text(name).notNull().$type<DampingState>();
+export const dampingStates = ['none', 'connected', 'disconnected', 'locked', 'leaking'] as const;
+export const excitations = ['ambient', 'wind', 'traffic', 'mallet', 'pull-release'] as const;
+export const planes = ['in-plane', 'out-of-plane'] as const;
+export const peakSources = ['typed', 'record'] as const;
+const dampingState = (name: string) => text(name).notNull().$type<(typeof dampingStates)[number]>();
 
 /** One visit to one span in one campaign. */
 export const measurements = pgTable(
@@ -15,7 +19,7 @@ export const measurements = pgTable(
     spanId: uuid('span_id').notNull(),
     visitedAt: moment('visited_at').notNull(),
     sensorPosition: si('sensor_position'),
-    excitation: text('excitation').notNull().$type<'ambient' | 'wind' | 'traffic' | 'mallet' | 'pull-release'>(),
+    excitation: text('excitation').notNull().$type<(typeof excitations)[number]>(),
     lowerDamperState: dampingState('lower_damper_state'),
     upperDamperState: dampingState('upper_damper_state'),
     bushingState: dampingState('bushing_state'),
@@ -32,6 +36,12 @@ export const measurements = pgTable(
     index('measurements_by_span').on(table.firmId, table.spanId),
     withinFirm(table, table.campaignId, campaigns, 'measurements_campaign'),
     withinFirm(table, table.spanId, spans, 'measurements_span'),
+    oneOf(table.excitation, excitations),
+    oneOf(table.lowerDamperState, dampingStates),
+    oneOf(table.upperDamperState, dampingStates),
+    oneOf(table.bushingState, dampingStates),
+    notNegative('measurements_sensor_not_negative', table.sensorPosition),
+    check('measurements_version_from_one', sql`${table.version} >= 1`),
   ],
 );
 
@@ -43,8 +53,8 @@ export const modalPeaks = pgTable(
     mode: integer('mode').notNull(),
     frequency: si('frequency').notNull(),
     standardUncertainty: si('standard_uncertainty'),
-    plane: text('plane').notNull().$type<'in-plane' | 'out-of-plane'>(),
-    source: text('source').notNull().$type<'typed' | 'record'>(),
+    plane: text('plane').notNull().$type<(typeof planes)[number]>(),
+    source: text('source').notNull().$type<(typeof peakSources)[number]>(),
     used: boolean('used').notNull(),
     setAsideReason: text('set_aside_reason'),
   },
@@ -52,5 +62,13 @@ export const modalPeaks = pgTable(
     tenantKey(table),
     index('modal_peaks_by_measurement').on(table.firmId, table.measurementId),
     withinFirm(table, table.measurementId, measurements, 'modal_peaks_measurement'),
+    // A mode is used once: of two peaks of one mode, one is set aside.
+    uniqueIndex('modal_peaks_mode_used_once').on(table.firmId, table.measurementId, table.mode, table.plane).where(sql`used`),
+    oneOf(table.plane, planes),
+    oneOf(table.source, peakSources),
+    check('modal_peaks_mode_from_one', sql`${table.mode} >= 1`),
+    positive('modal_peaks_positive', table.frequency),
+    positive('modal_peaks_uncertainty_is_never_zero', table.standardUncertainty),
+    check('modal_peaks_set_aside_with_a_reason', sql`${table.used} or ${table.setAsideReason} is not null`),
   ],
 );

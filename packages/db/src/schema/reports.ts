@@ -1,11 +1,11 @@
 import type { ReportTexts } from '@strandnote/core/report-content';
 import { sql } from 'drizzle-orm';
-import { index, integer, jsonb, pgTable, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import { check, index, integer, jsonb, type PgTableExtraConfigValue, pgTable, text, unique, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
 import { cables } from './cables.ts';
 import { campaigns } from './campaigns.ts';
 import { clients } from './clients.ts';
 import { files } from './files.ts';
-import { moment, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+import { isSha256, moment, oneOf, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
 
 export const reports = pgTable(
   'reports',
@@ -20,12 +20,16 @@ export const reports = pgTable(
   (table) => [
     tenantKey(table),
     unique('reports_number').on(table.firmId, table.number),
+    index('reports_by_campaign').on(table.firmId, table.campaignId),
     withinFirm(table, table.campaignId, campaigns, 'reports_campaign'),
     withinFirm(table, table.clientId, clients, 'reports_client'),
   ],
 );
 
-export type StoredRevisionState = 'draft' | 'in check' | 'returned' | 'approved' | 'issued' | 'superseded' | 'withdrawn';
+export const revisionStates = ['draft', 'in check', 'returned', 'approved', 'issued', 'superseded', 'withdrawn'] as const;
+export type StoredRevisionState = (typeof revisionStates)[number];
+export const signatureMeanings = ['prepared', 'checked and approved', 'issued'] as const;
+export const commentStates = ['open', 'closed'] as const;
 
 export const revisions = pgTable(
   'revisions',
@@ -54,7 +58,8 @@ export const revisions = pgTable(
     changedAt: moment('changed_at').notNull().defaultNow(),
     createdAt: moment('created_at').notNull().defaultNow(),
   },
-  (table) => [
+  // The type is written out because revisions and submissions refer to each other.
+  (table): PgTableExtraConfigValue[] => [
     tenantKey(table),
     unique('revisions_letter').on(table.firmId, table.reportId, table.letter),
     uniqueIndex('revisions_one_current').on(table.firmId, table.reportId).where(sql`state = 'issued'`),
@@ -63,6 +68,9 @@ export const revisions = pgTable(
     withinFirm(table, table.addressedClientId, clients, 'revisions_client'),
     withinFirm(table, table.unsignedFileId, files, 'revisions_unsigned_file'),
     withinFirm(table, table.signedFileId, files, 'revisions_signed_file'),
+    withinFirm(table, table.approvedSubmissionId, submissions, 'revisions_approved_submission'),
+    withinFirm(table, table.supersededBy, table, 'revisions_superseded_by'),
+    oneOf(table.state, revisionStates),
   ],
 );
 
@@ -96,6 +104,8 @@ export const submissions = pgTable(
     tenantKey(table),
     unique('submissions_number').on(table.firmId, table.revisionId, table.number),
     withinFirm(table, table.revisionId, revisions, 'submissions_revision'),
+    check('submissions_number_from_one', sql`${table.number} >= 1`),
+    check('submissions_hash_of_the_content', sql`${table.contentSha256} = encode(sha256(convert_to(${table.content}, 'UTF8')), 'hex')`),
   ],
 );
 
@@ -122,7 +132,7 @@ export const signatures = pgTable(
     ...tenantColumns,
     submissionId: uuid('submission_id').notNull(),
     revisionId: uuid('revision_id').notNull(),
-    meaning: text('meaning').notNull().$type<'prepared' | 'checked and approved' | 'issued'>(),
+    meaning: text('meaning').notNull().$type<(typeof signatureMeanings)[number]>(),
     userId: text('user_id').notNull(),
     name: text('name').notNull(),
     licenceNumber: text('licence_number').notNull().default(''),
@@ -136,6 +146,8 @@ export const signatures = pgTable(
     index('signatures_by_revision').on(table.firmId, table.revisionId),
     withinFirm(table, table.submissionId, submissions, 'signatures_submission'),
     withinFirm(table, table.revisionId, revisions, 'signatures_revision'),
+    oneOf(table.meaning, signatureMeanings),
+    isSha256(table.contentSha256),
   ],
 );
 
@@ -167,7 +179,7 @@ export const checkComments = pgTable(
     field: text('field').notNull().default(''),
     text: text('text').notNull(),
     authorUserId: text('author_user_id').notNull(),
-    state: text('state').notNull().default('open').$type<'open' | 'closed'>(),
+    state: text('state').notNull().default('open').$type<(typeof commentStates)[number]>(),
     answer: text('answer'),
     answeredBy: text('answered_by'),
     answeredAt: moment('answered_at'),
@@ -181,5 +193,6 @@ export const checkComments = pgTable(
     withinFirm(table, table.revisionId, revisions, 'check_comments_revision'),
     withinFirm(table, table.submissionId, submissions, 'check_comments_submission'),
     withinFirm(table, table.cableId, cables, 'check_comments_cable'),
+    oneOf(table.state, commentStates),
   ],
 );

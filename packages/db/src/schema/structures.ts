@@ -1,11 +1,13 @@
 import { jsonb, pgTable, text, uuid } from 'drizzle-orm/pg-core';
 import { clients } from './clients.ts';
-import { moment, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
+import { moment, oneOf, tenantColumns, tenantKey, withinFirm } from './tenant.ts';
 
 export interface StoredElevation {
   deck: { x: number; z: number }[];
   supports: { x: number; z: number }[][];
 }
+
+export const structureKinds = ['cable-stayed', 'arch', 'suspension', 'roof', 'mast', 'other'] as const;
 
 export const structures = pgTable(
   'structures',
@@ -13,7 +15,7 @@ export const structures = pgTable(
     ...tenantColumns,
     name: text('name').notNull(),
     reference: text('reference').notNull().default(''),
-    kind: text('kind').notNull().$type<'cable-stayed' | 'arch' | 'suspension' | 'roof' | 'mast' | 'other'>(),
+    kind: text('kind').notNull().$type<(typeof structureKinds)[number]>(),
     ownerName: text('owner_name').notNull().default(''),
     clientId: uuid('client_id'),
     place: text('place').notNull().default(''),
@@ -22,5 +24,5 @@ export const structures = pgTable(
     notes: text('notes').notNull().default(''),
     createdAt: moment('created_at').notNull().defaultNow(),
   },
-  (table) => [tenantKey(table), withinFirm(table, table.clientId, clients, 'structures_client')],
+  (table) => [tenantKey(table), withinFirm(table, table.clientId, clients, 'structures_client'), oneOf(table.kind, structureKinds)],
 );
