@@ -14,7 +14,7 @@ export function setCableInputs(report: Report, row: ResultRow): void {
   sheet.heading(3, 'Inputs');
   setTable(sheet, {
     rows: row.span.inputs,
-    padding: 1.5,
+    padding: 1.3,
     columns: [
       { head: 'Quantity', width: 176, cell: ({ quantity }) => inputWords[quantity] },
       {
@@ -27,17 +27,17 @@ export function setCableInputs(report: Report, row: ResultRow): void {
       { head: 'Unit', width: 54, cell: ({ quantity }) => quantities.symbol(quantityOfInput[quantity]) },
       {
         head: 'Standard uncertainty',
-        width: 76,
+        width: 92,
         align: 'decimal',
         style: styles.figure,
         cell: ({ quantity, standardUncertainty }) =>
           standardUncertainty ? quantities.spread(standardUncertainty, quantityOfInput[quantity]) : '–',
       },
-      { head: 'Source', width: sheet.width - 388, cell: ({ source }) => (source ? sourceWords[source] : 'derived') },
+      { head: 'Source', width: sheet.width - 404, cell: ({ source }) => (source ? sourceWords[source] : 'derived') },
     ],
   });
   sheet.space(6);
-  setDefinitions(sheet, [...endsAndVisit(report, row), ...comparedWith(report, row)], { columns: 2, termWidth: 74 });
+  setDefinitions(sheet, [...endsAndVisit(report, row), ...comparedWith(report, row)], { columns: 2, termWidth: 60 });
 }
 
 function endsAndVisit({ content, quantities }: Report, { span }: ResultRow): Definition[] {

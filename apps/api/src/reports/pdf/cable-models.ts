@@ -1,4 +1,5 @@
 import { type BudgetLine, formatNumber, type ModelRow, type Quantity, type TensionEstimate } from '@strandnote/core';
+import { reminder } from './cautions.ts';
 import { moment } from './dates.ts';
 import { setDefinitions } from './definitions.ts';
 import { ink } from './ink.ts';
@@ -37,7 +38,7 @@ function setModels({ sheet, quantities }: Report, output: TensionEstimate): void
         width: 50,
         align: 'decimal',
         style: styles.figure,
-        cell: ({ tension }) => quantities.tensionBeside(tension, output),
+        cell: ({ tension, id }) => (id === 'adopted' && output.boundsOnly !== null ? '–' : quantities.tensionBeside(tension, output)),
       },
       {
         head: 'to adopted, %',
@@ -75,8 +76,9 @@ function setModels({ sheet, quantities }: Report, output: TensionEstimate): void
   sheet.paragraph(
     `Bracket of the ends: ${quantities.tensionBeside(hinged, output)} ${force} if both are hinged, ${quantities.tensionBeside(clamped, output)} ${force} if both are clamped. ξ = ${formatNumber(output.dimensionless.xi, 0)}${output.dimensionless.lambdaSquared === null ? '' : `, λ² = ${formatNumber(output.dimensionless.lambdaSquared, significant(output.dimensionless.lambdaSquared, 2))}`}.`,
     styles.noteInk,
-    { after: 0 },
+    { after: 2 },
   );
+  sheet.paragraph(reminder, { ...styles.note, size: 7.6 }, { after: 0 });
 }
 
 /** Units of the budget as the engine writes them, and what they measure. */
@@ -147,14 +149,11 @@ function setBudget({ sheet, quantities }: Report, output: TensionEstimate): void
   }
 }
 
-function setNotes({ sheet }: Report, { warnings, diagnostics }: TensionEstimate): void {
-  const notes = [...warnings, ...diagnostics];
-  if (notes.length === 0) return;
+/** What explains the result; what warns of it stands at the head of the page. */
+function setNotes({ sheet }: Report, { diagnostics }: TensionEstimate): void {
+  if (diagnostics.length === 0) return;
   sheet.heading(3, 'Notes', { keep: 30 });
-  for (const { severity, message } of notes) {
-    const lead = severity === 'info' ? [] : [{ text: severity === 'serious' ? 'Serious: ' : 'Caution: ', face: 'text-strong' as const }];
-    sheet.paragraph([...lead, { text: message }], styles.noteInk, { after: 2 });
-  }
+  for (const { message } of diagnostics) sheet.paragraph(message, styles.noteInk, { after: 2 });
 }
 
 function setProvenance({ sheet, content }: Report, { cable, span }: ResultRow): void {

@@ -14,11 +14,13 @@ import { toReference } from './zone-summary.ts';
 const large: TextStyle = { face: 'text-strong', size: 24, leading: 1.15, pigment: 'ink' };
 const beside: TextStyle = { face: 'text', size: 14, leading: 1.15, pigment: 'ink' };
 const zoneStyle: TextStyle = { face: 'text-strong', size: 12, leading: 1.2, pigment: 'ink' };
+const warning: TextStyle = { ...styles.noteInk, pigment: 'ochre' };
 const small: TextStyle = { ...styles.note, size: 7.6 };
 
 /** One span on a leaf of its own: what came out, what went in, what was heard, and how the tension follows. */
 export function setCablePage(report: Report, row: ResultRow): void {
   const { sheet } = report;
+  sheet.running = `Cable ${row.name}`;
   sheet.newPage();
   sheet.heading(2, `Cable ${row.name}`, { name: row.destination });
   sheet.paragraph(identity(row), styles.note, { after: 6 });
@@ -50,6 +52,10 @@ function setResult(report: Report, row: ResultRow): void {
   sheet.y = top;
   setBar(report, row, barLeft);
   sheet.y = Math.max(below, sheet.y) + 2;
+  for (const { severity, message } of row.span.estimate!.output.warnings) {
+    const lead = severity === 'serious' ? 'Serious: ' : severity === 'caution' ? 'Caution: ' : '';
+    sheet.paragraph([{ text: lead, face: 'text-strong' }, { text: message }], warning, { after: 2 });
+  }
   sheet.paragraph(shortCaution(report), small, { after: 0 });
 }
 
@@ -73,7 +79,8 @@ function setTension({ sheet, quantities }: Report, row: ResultRow, width: number
     { after: 4, width },
   );
   sheet.paragraph(capitalised(zoneWords[row.span.decision.zone]), zoneStyle, { after: 1, width });
-  sheet.paragraph(comparison(row), styles.noteInk, { after: 0, width });
+  const compared = comparison(row);
+  if (compared) sheet.paragraph(compared, styles.noteInk, { after: 0, width });
 }
 
 function comparison(row: ResultRow): string {
@@ -86,27 +93,28 @@ function comparison(row: ResultRow): string {
 function setBar({ sheet, quantities }: Report, row: ResultRow, x: number): void {
   const bar = barOf(row);
   const scale = sharedScale([bar]);
-  const height = 44;
+  const height = 40;
   const y = sheet.y + 4;
   const symbol = quantities.symbol('force');
   const ends = [scale.from, scale.to].map((value) => `${quantities.tensionBeside(value, row.span.estimate!.output)}`);
-  sheet.tag('Figure', { alt: `Interval bar from ${ends[0]} to ${ends[1]} ${symbol}`, bbox: [x, y, x + barWidth, y + height + 24] }, () => {
+  sheet.tag('Figure', { alt: `Interval bar from ${ends[0]} to ${ends[1]} ${symbol}`, bbox: [x, y, x + barWidth, y + height + 33] }, () => {
     drawFigure(sheet.doc, sheet.faces, intervalBar(bar, scale, { width: barWidth, height }), { x, y });
     sheet.textAt(ends[0]!, x, y + height + 2, small);
     sheet.textAt(`${ends[1]} ${symbol}`, x, y + height + 2, small, { align: 'right', width: barWidth });
-    sheet.textAt(partsInWords(row), x, y + height + 13, small);
+    for (const [index, words] of partsInWords(row).entries()) sheet.textAt(words, x, y + height + 13 + 10 * index, small);
   });
-  sheet.y = y + height + 26;
+  sheet.y = y + height + 34;
 }
 
-/** What is drawn in this bar besides the interval. */
-function partsInWords({ cable, span }: ResultRow): string {
-  return [
-    span.decision.lowerLimit !== null || span.decision.upperLimit !== null ? 'band: limits' : null,
-    cable.referenceTension ? 'dashed: reference' : null,
-    'whisker: hinged … clamped',
-    span.lastSurvey ? 'dot: last survey' : null,
-  ]
-    .filter(Boolean)
-    .join('  ·  ');
+/** What is drawn in this bar besides the interval, in two lines. */
+function partsInWords({ cable, span }: ResultRow): string[] {
+  const lines = [
+    [
+      span.decision.lowerLimit !== null || span.decision.upperLimit !== null ? 'band: limits' : null,
+      cable.referenceTension ? 'dashed: reference' : null,
+      span.lastSurvey ? 'dot: last survey' : null,
+    ],
+    ['whisker: both ends hinged … clamped'],
+  ];
+  return lines.map((words) => words.filter(Boolean).join('  ·  ')).filter((words) => words !== '');
 }

@@ -6,7 +6,7 @@ import { signed } from './quantities.ts';
 import type { Report, ResultRow } from './report-input.ts';
 import { setTable } from './table.ts';
 import { styles } from './text-layout.ts';
-import { planeWords } from './words.ts';
+import { counted, planeWords } from './words.ts';
 
 interface PeakRow {
   peak: FrozenPeak;
@@ -72,7 +72,7 @@ export function setCablePeaks(report: Report, row: ResultRow): void {
 function peakRows({ span }: ResultRow): PeakRow[] {
   const { residuals, inputs } = span.estimate!.output;
   return span
-    .measurement!.peaks.toSorted((a, b) => a.plane.localeCompare(b.plane) || a.frequency - b.frequency)
+    .measurement!.peaks.toSorted((a, b) => Number(b.used) - Number(a.used) || a.plane.localeCompare(b.plane) || a.frequency - b.frequency)
     .map((peak) => {
       const index = peak.used ? residuals.findIndex(({ mode, plane }) => mode === peak.mode && plane === peak.plane) : -1;
       const weighted = index === -1 ? null : inputs.frequencyUncertainty[index]! * peak.frequency;
@@ -114,14 +114,14 @@ function uncertaintyInWords({ span }: ResultRow): string {
     mixed: 'u is as stated where it was stated, and estimated elsewhere',
   }[inputs.frequencyUncertaintySource];
   const enlarged = goodness.scale > 1 ? `, enlarged ${formatNumber(goodness.scale, 1)} times to match the residuals` : '';
-  return `${origin}${enlarged}. χ² = ${formatNumber(goodness.chiSquared, 1)} on ${goodness.degreesOfFreedom} degrees of freedom${goodness.pValue === null ? '' : `, p = ${goodness.pValue < 0.001 ? '< 0.001' : formatNumber(goodness.pValue, 3)}`}.`.replace(
+  return `${origin}${enlarged}. χ² = ${formatNumber(goodness.chiSquared, 1)} on ${counted(goodness.degreesOfFreedom, 'degree')} of freedom${goodness.pValue === null ? '' : `, p = ${goodness.pValue < 0.001 ? '< 0.001' : formatNumber(goodness.pValue, 3)}`}.`.replace(
     '= <',
     '<',
   );
 }
 
 const scale = 0.78;
-const plotHeight = 164;
+const plotHeight = 150;
 
 function setPlots(report: Report, row: ResultRow, rows: readonly PeakRow[]): void {
   const { sheet } = report;
@@ -136,12 +136,7 @@ function setPlots(report: Report, row: ResultRow, rows: readonly PeakRow[]): voi
       ? [{ mode: peak.mode, residual: residual.relative, standardUncertainty: uncertainty && uncertainty / peak.frequency, used: true }]
       : [],
   );
-  const peaks = rows.map(({ peak, uncertainty }) => ({
-    mode: peak.mode,
-    frequency: peak.frequency,
-    standardUncertainty: uncertainty,
-    used: peak.used,
-  }));
+  const peaks = drawnPeaks(rows);
   const plots = [
     { alt: `Fit plot of ${rows.length} peaks over the square of the mode number`, figure: fitPlot(peaks, curves(row), sizeOf(widths[0])) },
     { alt: `Residual plot of ${residuals.length} peaks in per cent`, figure: residualPlot(residuals, sizeOf(widths[1])) },
@@ -153,6 +148,16 @@ function setPlots(report: Report, row: ResultRow, rows: readonly PeakRow[]): voi
     );
   }
   sheet.y = y + plotHeight + 8;
+}
+
+/** Peaks for the fit plot. One set aside far from the line would press the others flat; the table has it. */
+function drawnPeaks(rows: readonly PeakRow[]) {
+  const level = ({ peak }: PeakRow) => (peak.frequency / peak.mode) ** 2;
+  const used = rows.filter(({ peak }) => peak.used).map(level);
+  const near = (row: PeakRow) => level(row) > Math.min(...used) * 0.9 && level(row) < Math.max(...used) * 1.1;
+  return rows
+    .filter((row) => row.peak.used || near(row))
+    .map(({ peak, uncertainty }) => ({ mode: peak.mode, frequency: peak.frequency, standardUncertainty: uncertainty, used: peak.used }));
 }
 
 /** The adopted fit between its bounds. */

@@ -15,6 +15,10 @@ export function setCautions({ sheet, content, quantities, input }: Report): void
   for (const sentence of sentences) sheet.paragraph(dashed(sentence), styles.noteInk, { after: 1.5 });
 }
 
+/** What stands on the pages of a cable behind its first. */
+export const reminder =
+  'Estimated from vibration; right only if cable, mode numbers, length and mass are right, and no proof of sound wires, anchorages or capacity. The cautions on the first page of this report belong to these figures.';
+
 /** The same in one breath, beside results. */
 export function shortCaution({ content, quantities, input }: Report): string {
   return `${input.draft ? 'Not checked by anybody yet. ' : ''}Estimated from vibration: averages at ${circumstances(content.campaign, quantities)}. The intervals hold only if cable, mode numbers, length and mass are right. A normal tension does not show that wires or anchorages are sound, nor capacity under live load. The decision belongs to a licensed engineer.`;

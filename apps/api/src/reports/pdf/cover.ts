@@ -22,7 +22,7 @@ export function setCover(report: Report): void {
   setDefinitions(sheet, facts(report), { columns: 2, perColumn: 3, termWidth: 56 });
   setZoneSummary(report);
   sheet.space(8);
-  setElevation(report, { maxHeight: 84 });
+  setElevation(report, { maxHeight: 168 });
   setCautions(report);
 }
 

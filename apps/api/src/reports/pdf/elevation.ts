@@ -12,8 +12,12 @@ const label: TextStyle = { face: 'figures', size: 6.5, leading: 1, pigment: 'ink
 
 type Drawn = FrozenCable & { lowerAnchor: NonNullable<FrozenCable['lowerAnchor']>; upperAnchor: NonNullable<FrozenCable['upperAnchor']> };
 
-/** The elevation of the structure, each plane of cables by itself, every cable drawn by its zone. */
-export function setElevation(report: Report, { maxHeight = 105 }: { maxHeight?: number } = {}): void {
+/**
+ * The elevation of the structure, each plane of cables by itself, every cable drawn by its zone.
+ *
+ * @param maxHeight of all planes together, in points
+ */
+export function setElevation(report: Report, { maxHeight }: { maxHeight: number }): void {
   const { sheet, content } = report;
   const drawn = content.cables.filter((cable): cable is Drawn => cable.lowerAnchor !== null && cable.upperAnchor !== null);
   if (drawn.length === 0) return;
@@ -22,7 +26,7 @@ export function setElevation(report: Report, { maxHeight = 105 }: { maxHeight?: 
     setPlane(
       report,
       cables.map(({ cable }) => cable),
-      maxHeight,
+      Math.max(70, maxHeight / planes.length),
     );
   const without = content.cables.length - drawn.length;
   if (without > 0) {

@@ -30,7 +30,11 @@ const bytes = new Map<Face, Buffer>();
 
 /** What pdfkit knows of a font and its types do not tell. */
 interface OpenFont {
-  font: { hasGlyphForCodePoint(codePoint: number): boolean };
+  font: {
+    hasGlyphForCodePoint(codePoint: number): boolean;
+    unitsPerEm: number;
+    layout(text: string): { glyphs: { advanceWidth: number; path: { toSVG(): string } }[] };
+  };
   widthOfString(text: string, size: number): number;
 }
 
@@ -73,6 +77,18 @@ export class Faces {
     return this.#open(face).font.hasGlyphForCodePoint(letter.codePointAt(0)!);
   }
 
+  /** Outlines of letters side by side, in units of which an em has `unitsPerEm`, y upwards: for letters that are a drawing. */
+  outlines(text: string, face: Face): { unitsPerEm: number; width: number; letters: { x: number; path: string }[] } {
+    const { font } = this.#open(face);
+    let x = 0;
+    const letters = font.layout(text).glyphs.map(({ advanceWidth, path }) => {
+      const letter = { x, path: path.toSVG() };
+      x += advanceWidth;
+      return letter;
+    });
+    return { unitsPerEm: font.unitsPerEm, width: x, letters };
+  }
+
   /**
    * Splits a text into stretches that can be printed. A letter that no face has is written as its code, [U+4E2D], so that
    * it is seen to be there; the attached content holds it as it was typed.
@@ -94,12 +110,13 @@ export class Faces {
     const letter = letters[index]!;
     // A thin space is as wide as a figure in the face of figures: it would part a number in two.
     if (letter === '\u2009' && (face === 'figures' || face === 'figures-strong')) return 'text';
+    // The faces of text have some Greek letters and not others: a word is set in one face.
+    const inWord = isGreek(letter) && [index - 1, index + 1].some((other) => isGreek(letters[other]));
+    if (inWord && this.has(letter, 'fallback')) return 'fallback';
     if (this.has(letter, face)) return face;
     const candidates = substitutes[face].filter((other) => this.has(letter, other));
-    // A lone Greek letter is the symbol of a quantity and set in italics; in a word it is a letter.
-    const inWord = [index - 1, index + 1].some((other) => isLetter(letters[other]) && !this.has(letters[other]!, face));
-    const upright = candidates.find((other) => other !== 'symbol');
-    return (isLetter(letter) && !inWord ? candidates[0] : (upright ?? candidates[0])) ?? null;
+    // A lone Greek letter is the symbol of a quantity and set in italics; everything else stands upright.
+    return (isGreek(letter) ? candidates[0] : (candidates.find((other) => other !== 'symbol') ?? candidates[0])) ?? null;
   }
 
   #open(face: Face): OpenFont {
@@ -113,8 +130,8 @@ export class Faces {
   }
 }
 
-function isLetter(letter: string | undefined): boolean {
-  return letter !== undefined && /\p{L}/u.test(letter);
+function isGreek(letter: string | undefined): boolean {
+  return letter !== undefined && /\p{Script=Greek}/u.test(letter) && /\p{L}/u.test(letter);
 }
 
 function codeOf(letter: string): string {

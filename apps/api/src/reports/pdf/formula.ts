@@ -12,8 +12,8 @@ interface Box {
   draw: (x: number, y: number) => void;
 }
 
-/** A formula as it is written down: marked text, fractions, roots, and rows of them. */
-export type Formula = string | { over: Formula; under: Formula } | { root: Formula } | readonly Formula[];
+/** A formula as it is written down: marked text, fractions, roots, what stands within parentheses, and rows of them. */
+export type Formula = string | { over: Formula; under: Formula } | { root: Formula } | { within: Formula } | readonly Formula[];
 
 const size = 10.5;
 const style: TextStyle = { ...styles.body, size, leading: 1 };
@@ -37,6 +37,7 @@ export function spoken(formula: Formula): string {
       .join('');
   if ('over' in formula) return `(${spoken(formula.over)}) / (${spoken(formula.under)})`;
   if ('root' in formula) return `√(${spoken(formula.root)})`;
+  if ('within' in formula) return `(${spoken(formula.within)})`;
   return formula.map(spoken).join('');
 }
 
@@ -44,6 +45,7 @@ function layout(sheet: Sheet, formula: Formula): Box {
   if (typeof formula === 'string') return words(sheet, formula);
   if ('over' in formula) return fraction(sheet, layout(sheet, formula.over), layout(sheet, formula.under));
   if ('root' in formula) return root(sheet, layout(sheet, formula.root));
+  if ('within' in formula) return within(sheet, layout(sheet, formula.within));
   return row(formula.map((part) => layout(sheet, part)));
 }
 
@@ -96,6 +98,34 @@ function root(sheet: Sheet, inner: Box): Box {
     },
   };
 }
+
+/** Parentheses as tall as what they hold. */
+function within(sheet: Sheet, inner: Box): Box {
+  const tall = inner.ascent + inner.descent;
+  // The parentheses of STIX are as tall as their size, two tenths of it below the baseline.
+  const parenthesis = { ...style, face: 'fallback', size: tall } as const;
+  const width = sheet.faces.widthOf('(', 'fallback', tall) * narrow;
+  const drawOne = (text: string, x: number, y: number) => {
+    sheet.doc.save();
+    sheet.doc.translate(x, y).scale(narrow, 1);
+    sheet.textAt(text, 0, -tall / 2 - axis * 0.2, parenthesis);
+    sheet.doc.restore();
+  };
+  return {
+    width: inner.width + 2 * width + 1.5,
+    ascent: inner.ascent,
+    descent: inner.descent,
+    draw: (x, y) => {
+      const middle = y + (inner.descent - inner.ascent) / 2;
+      drawOne('(', x, middle);
+      inner.draw(x + width, y);
+      drawOne(')', x + width + inner.width, middle);
+    },
+  };
+}
+
+/** A tall parenthesis is set narrower, or its strokes would be heavier than the letters. */
+const narrow = 0.6;
 
 function row(parts: readonly Box[]): Box {
   return {

@@ -26,7 +26,7 @@ const steps: readonly Step[] = [
   {
     title: 'Stiff string with hinged ends',
     text: 'Bending stiffness raises the higher modes. On the square of the mode number the value ({f}_(n)/{n})² is a straight line: its height gives the tension, its slope the bending stiffness.',
-    formulas: [['{f}_(n)² = ', { over: '{n}²', under: '4{L}²{m}' }, ' ({T} + ', { over: '{n}²π²{EI}', under: '{L}²' }, ')']],
+    formulas: [['{f}_(n)² = ', { over: '{n}²', under: '4{L}²{m}' }, ' ', { within: ['{T} + ', { over: '{n}²π²{EI}', under: '{L}²' }] }]],
     sources: ['blevins'],
     used: always,
   },
@@ -74,15 +74,12 @@ const steps: readonly Step[] = [
         { over: '{m}{g} cos {θ}', under: '{T}' },
       ],
       [
-        '{λ}² = (',
-        { over: '{m}{g}{L} cos {θ}', under: '{T}' },
-        ')² ',
+        '{λ}² = ',
+        { within: { over: '{m}{g}{L} cos {θ}', under: '{T}' } },
+        '² ',
         { over: '{L}{EA}', under: '{T}{L}_(e)' },
-        '     with     {L}_(e) = {L} (1 + ',
-        { over: '1', under: '8' },
-        ' (',
-        { over: '{m}{g}{L} cos {θ}', under: '{T}' },
-        ')²)',
+        '     with     {L}_(e) = {L} ',
+        { within: ['1 + ', { over: '1', under: '8' }, ' ', { within: { over: '{m}{g}{L} cos {θ}', under: '{T}' } }, '²'] },
       ],
     ],
     sources: ['irvineCaughey', 'irvine'],
@@ -115,7 +112,7 @@ export function setMethod({ sheet, content, rows }: Report): void {
   sheet.heading(3, 'Symbols');
   sheet.paragraph(
     marked(
-      '{f}_(n) natural frequency of mode {n} · {L} free vibrating length · {m} mass per length · {T} mean chord tension · {EI} bending stiffness · {EA} axial stiffness · {k} rotational stiffness of an end · {θ} inclination of the chord · {g} = 9.80665 m/s² · {ω} = 2π{f} · {b}_(j) integral of the mass-normalised mode {j}',
+      '{f}_(n) natural frequency of mode {n} · {L} free vibrating length · {m} mass per length · {T} mean chord tension · {EI} bending stiffness · {EA} axial stiffness · {k} rotational stiffness of an end · {α}, {β} wave numbers at the ends and along the cable · {φ} phase of an end · {x}_(d) distance of a damper from its end · {θ} inclination of the chord · {L}_(e) length that stretches · {g} = 9.80665 m/s² · {ω} = 2π{f} · {b}_(j) integral of the mass-normalised mode {j}',
     ),
     styles.noteInk,
   );

@@ -18,7 +18,7 @@ export function drawPageMarks(sheet: Sheet, frame: Frame, input: ReportInput): v
   if (input.draft) drawAcross(sheet, frame, draftMark);
   else if (firm.demonstration) drawAcross(sheet, frame, 'Demonstration');
   const y = frame.top + 7;
-  sheet.textAt(`${structure.name}, campaign ${campaign.number}: ${campaign.name}`, sheet.room.left, y, styles.head);
+  sheet.textAt([structure.name, campaign.name, sheet.running].filter(Boolean).join('  ·  '), sheet.room.left, y, styles.head);
   const marks = [input.draft ? draftMark : null, firm.demonstration ? demonstrationMark : null].filter((text) => text !== null);
   if (marks.length > 0) drawBoxed(sheet, marks.join('. '), y);
 }
@@ -35,13 +35,20 @@ function drawBoxed(sheet: Sheet, text: string, y: number): void {
   sheet.textAt(text, x, y, mark);
 }
 
-/** Under the content, so that it hides nothing. */
+/** Under the content, so that it hides nothing; as outlines, so that no program that reads the page mixes it into the text. */
 function drawAcross({ doc, faces }: Sheet, frame: Frame, text: string): void {
   const [middleX, middleY] = [(frame.left + frame.right) / 2, (frame.top + frame.bottom) / 2];
-  const width = faces.widthOf(text, 'text-strong', acrossSize);
+  const { unitsPerEm, width, letters } = faces.outlines(text, 'text-strong');
+  const scale = acrossSize / unitsPerEm;
   doc.save();
-  doc.rotate(-52, { origin: [middleX, middleY] });
-  doc.font('text-strong').fontSize(acrossSize).fillColor(pale);
-  doc.text(text, middleX - width / 2, middleY + acrossSize * 0.3, { lineBreak: false, baseline: 'alphabetic' });
+  doc.translate(middleX, middleY).rotate(-52).scale(scale, -scale);
+  // A third of an em is about the middle of the letters.
+  doc.translate(-width / 2, -unitsPerEm / 3);
+  for (const { x, path } of letters) {
+    if (path === '') continue;
+    doc.save();
+    doc.translate(x, 0).path(path).fill(pale);
+    doc.restore();
+  }
   doc.restore();
 }

@@ -1,9 +1,11 @@
 import { setBarKey } from './bar-key.ts';
 import { shortCaution } from './cautions.ts';
+import { drawLine } from './draw-text.ts';
 import { barCell, scaleInWords, scaleOfBars } from './interval-bars.ts';
 import type { Report, ResultRow } from './report-input.ts';
+import { baseline } from './sheet.ts';
 import { type Cell, type Column, setTable } from './table.ts';
-import { styles, type TextStyle } from './text-layout.ts';
+import { layoutLines, styles, type TextStyle } from './text-layout.ts';
 import { referenceWords, zoneWords } from './words.ts';
 import { toReference } from './zone-summary.ts';
 
@@ -11,12 +13,21 @@ const figure: TextStyle = { ...styles.figure, size: 8 };
 const strong: TextStyle = { ...figure, face: 'figures-strong' };
 const small: TextStyle = { ...styles.cell, size: 8 };
 
+const lineHeight = styles.note.size * styles.note.leading;
+
 /** The results of all cables on one scale, with the caution that belongs to them. */
 export function setResultsTable(report: Report): void {
   const { sheet, rows } = report;
   const scale = scaleOfBars(rows);
   if (scale) setBarKey(sheet);
-  setTable(sheet, { rows, padding: 2, middle: true, columns: columns(report, scale) });
+  const caution = layoutLines(sheet.faces, shortCaution(report), styles.note, sheet.width);
+  const draw = (y: number) => {
+    for (const [index, line] of caution.entries())
+      drawLine(sheet.doc, line, sheet.left, y + 6 + index * lineHeight + baseline(styles.note));
+  };
+  // Every page that shows a tension carries the caution: the last as content, those before as its repetition.
+  const foot = { height: 6 + caution.length * lineHeight, draw };
+  setTable(sheet, { rows, padding: 2, middle: true, columns: columns(report, scale), foot });
   sheet.space(6);
   sheet.paragraph(shortCaution(report), styles.note);
 }

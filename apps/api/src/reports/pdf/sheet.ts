@@ -2,7 +2,7 @@ import { drawLine } from './draw-text.ts';
 import { Faces } from './faces.ts';
 import { ink } from './ink.ts';
 import type { PdfDocument } from './pdf-document.ts';
-import { type Inline, type Line, layoutLines, plainText, styles, type TextStyle } from './text-layout.ts';
+import { balancedLines, type Inline, type Line, layoutLines, plainText, styles, type TextStyle } from './text-layout.ts';
 
 /** A structure element of a tagged document. pdfkit's types leave out what this report needs of it. */
 export interface Element {
@@ -40,6 +40,8 @@ export class Sheet {
   readonly room: Room;
   readonly landmarks: Landmark[] = [];
   y = 0;
+  /** What the head of the pages to come names besides the survey. */
+  running = '';
   /** What new elements are added to. */
   parent: Element;
   readonly #root: Element;
@@ -118,7 +120,7 @@ export class Sheet {
     title: Inline,
     { keep = 60, style = headingStyles[level], name }: { keep?: number; style?: TextStyle; name?: string } = {},
   ): void {
-    const lines = layoutLines(this.faces, title, style, this.width);
+    const lines = level === 1 ? balancedLines(this.faces, title, style, this.width) : layoutLines(this.faces, title, style, this.width);
     const height = lines.length * style.size * style.leading;
     const before = this.y > this.room.top ? spaceBefore[level] : 0;
     this.need(before + height + keep);

@@ -33,8 +33,8 @@ export interface Table<Row> {
   padding?: number;
   /** Short cells stand in the middle of their row, beside a drawing that fills it. */
   middle?: boolean;
-  /** Rows after which the rule is heavier. */
-  strongAfter?: (row: Row) => boolean;
+  /** What stands under the rows of every page that the table leaves unfinished. */
+  foot?: { height: number; draw: (y: number) => void };
 }
 
 interface LaidCell {
@@ -50,7 +50,7 @@ interface LaidTable<Row> {
   padding: number;
   head: Line[][];
   headHeight: number;
-  rows: { row: Row; cells: LaidCell[]; height: number }[];
+  rows: { cells: LaidCell[]; height: number }[];
   /** Width of the longest fraction in each column. */
   fractions: number[];
 }
@@ -65,21 +65,15 @@ export function setTable<Row>(sheet: Sheet, table: Table<Row>): void {
   const head = sheet.tag('TR', {}, undefined, sheet.tag('THead', {}, undefined, element));
   setHead(sheet, laid, (_, draw) => sheet.tag('TH', { scope: 'Column' }, draw, head));
   const body = sheet.tag('TBody', {}, undefined, element);
-  for (const { row, cells, height } of laid.rows) {
-    if (sheet.y + height > sheet.room.bottom + 0.01) {
+  for (const { cells, height } of laid.rows) {
+    if (sheet.y + height + (table.foot?.height ?? 0) > sheet.room.bottom + 0.01) {
+      if (table.foot) sheet.artifact(() => table.foot!.draw(sheet.y), 'Pagination');
       sheet.newPage();
       setHead(sheet, laid, (_, draw) => sheet.artifact(draw, 'Pagination'));
     }
     setRow(sheet, laid, cells, height, sheet.tag('TR', {}, undefined, body));
-    const strong = table.strongAfter?.(row) ?? false;
-    sheet.artifact(() => sheet.rule(laid.x, laid.x + laid.width, sheet.y, strong ? 0.8 : 0.4, strong ? ink.ink : ink.line));
+    sheet.artifact(() => sheet.rule(laid.x, laid.x + laid.width, sheet.y));
   }
-}
-
-/** How much room a table needs if it is not broken. */
-export function heightOfTable<Row>(sheet: Sheet, table: Table<Row>): number {
-  const { headHeight, rows } = layTable(sheet, table);
-  return rows.reduce((sum, { height }) => sum + height, headHeight);
 }
 
 function layTable<Row>(sheet: Sheet, table: Table<Row>): LaidTable<Row> {
@@ -89,7 +83,7 @@ function layTable<Row>(sheet: Sheet, table: Table<Row>): LaidTable<Row> {
   const headLines = Math.max(...head.map((lines) => lines.length));
   const rows = table.rows.map((row) => {
     const cells = columns.map((column) => layCell(sheet, column.cell(row), column, inner(columns, column)));
-    return { row, cells, height: Math.max(...cells.map(({ height }) => height)) + 2 * padding };
+    return { cells, height: Math.max(...cells.map(({ height }) => height)) + 2 * padding };
   });
   return {
     table,

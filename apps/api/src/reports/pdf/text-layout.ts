@@ -90,6 +90,17 @@ export function layoutLines(faces: Faces, inline: Inline, style: TextStyle, widt
   return lines;
 }
 
+/** The same lines of about one length: no word is left alone on the last. */
+export function balancedLines(faces: Faces, inline: Inline, style: TextStyle, width: number): Line[] {
+  let lines = layoutLines(faces, inline, style, width);
+  for (let narrower = width - 10; narrower > width / 2; narrower -= 10) {
+    const tried = layoutLines(faces, inline, style, narrower);
+    if (tried.length > lines.length) break;
+    lines = tried;
+  }
+  return lines;
+}
+
 interface Word {
   kind: 'word';
   pieces: Piece[];

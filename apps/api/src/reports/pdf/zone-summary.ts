@@ -47,7 +47,7 @@ function resultInWords({ rows, content }: Report): Inline {
   const covered =
     measured === rows.length
       ? `All ${counted(rows.length, what)} of this report were measured.`
-      : `${measured} of ${counted(rows.length, what)} were measured; the others are listed with the reason.`;
+      : `${measured} of ${counted(rows.length, what)} were measured; ${rows.length - measured === 1 ? 'the other is' : 'the others are'} listed with the reason.`;
   return [{ text: `${covered} ` }, { text: limitsInWords(basis) }];
 }
 
