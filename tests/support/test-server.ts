@@ -4,10 +4,13 @@ import { createRequire } from 'node:module';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import type { Role } from '@strandnote/api/contract';
+import type { RoleUrls } from '@strandnote/db';
 import pg from 'pg';
 import supertest from 'supertest';
 import { createApp } from '../../apps/api/src/app.ts';
 import { createDeps } from '../../apps/api/src/create-deps.ts';
+import { createLog } from '../../apps/api/src/create-log.ts';
+import type { AppDeps } from '../../apps/api/src/deps.ts';
 import { readEnv } from '../../apps/api/src/env.ts';
 import { createTasks } from '../../apps/api/src/jobs/tasks.ts';
 import { createAccount } from '../../apps/api/src/members/accept-invitation.ts';
@@ -30,6 +33,7 @@ export interface Reply {
   bytes: Buffer;
 }
 
+type Express = ReturnType<typeof createApp>;
 type Method = 'get' | 'post' | 'put' | 'patch' | 'delete';
 type Methods = Record<Method, (path: string, body?: object) => Promise<Reply>>;
 
@@ -44,6 +48,9 @@ export interface SignedIn extends Methods {
 }
 
 export interface TestServer {
+  app: Express;
+  deps: AppDeps;
+  urls: RoleUrls;
   superuser: pg.Client;
   mail: ReceivedMail[];
   anchorFile: string;
@@ -52,13 +59,22 @@ export interface TestServer {
   createFirm: (name?: string) => Promise<string>;
   createClient: (firmId: string, name?: string) => Promise<string>;
   join: (firmId: string, person: { name: string; roles: Role[]; clientId?: string }) => Promise<SignedIn>;
+  /** The session cookie of the person with this address. */
+  signIn: (email: string, password?: string) => Promise<string>;
   anonymous: (method: Method, path: string, body?: object) => Promise<Reply>;
   /** Runs every job in the queue to its end, as the worker would. */
   runJobs: () => Promise<void>;
   stop: () => Promise<void>;
 }
 
-export async function startTestServer(): Promise<TestServer> {
+/** @param settings of the environment that differ, such as PUBLIC_URL; `lines` collects the log */
+export async function startTestServer({
+  settings = {},
+  lines,
+}: {
+  settings?: Record<string, string>;
+  lines?: string[];
+} = {}): Promise<TestServer> {
   const database = await createTestDatabase();
   const mailServer = await startMailServer();
   const folder = mkdtempSync(join(tmpdir(), 'strandnote-test-'));
@@ -71,11 +87,15 @@ export async function startTestServer(): Promise<TestServer> {
     ANCHOR_FILE: join(folder, 'anchors.jsonl'),
     AUTH_SECRET: 'a secret that is long enough for a test',
     SMTP_URL: mailServer.url,
-    LOG_LEVEL: process.env.TEST_LOG_LEVEL ?? 'silent',
+    LOG_LEVEL: process.env.TEST_LOG_LEVEL ?? (lines ? 'debug' : 'silent'),
+    ...settings,
   });
   const now = { at: new Date('2026-09-14T08:00:00.000Z') };
   await keepDemonstrationIdentity(folder, { name: 'Strandnote in test', now: now.at });
-  const { deps, close } = createDeps(env, { clock: () => tick(now) });
+  const { deps, close } = createDeps(env, {
+    clock: () => tick(now),
+    log: createLog(env, lines && { write: (line) => void lines.push(line) }),
+  });
   const app = createApp(deps);
   const superuser = new pg.Client({ connectionString: database.superuserUrl });
   await superuser.connect();
@@ -130,8 +150,8 @@ export async function startTestServer(): Promise<TestServer> {
     return { userId, name, email, password, ...below(firmId), elsewhere: below };
   }
 
-  async function signIn(email: string): Promise<string> {
-    const reply = await call('post', '/api/auth/sign-in/email', null, { email, password });
+  async function signIn(email: string, typed = password): Promise<string> {
+    const reply = await call('post', '/api/auth/sign-in/email', null, { email, password: typed });
     if (reply.status !== 200) throw new Error(`Signing in failed: ${reply.status} ${reply.text}`);
     return [reply.headers['set-cookie']]
       .flat()
@@ -140,6 +160,9 @@ export async function startTestServer(): Promise<TestServer> {
   }
 
   return {
+    app,
+    deps,
+    urls: database.urls,
     superuser,
     mail: mailServer.received,
     anchorFile: env.ANCHOR_FILE,
@@ -147,6 +170,7 @@ export async function startTestServer(): Promise<TestServer> {
     createFirm,
     createClient,
     join: joinFirm,
+    signIn,
     anonymous: (method, path, body) => call(method, `/api/v1${path}`, null, body),
     runJobs: () =>
       runOnce({ connectionString: database.urls.jobs, taskList: createTasks(deps), logger: new Logger(() => () => undefined) }),

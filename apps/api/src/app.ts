@@ -27,6 +27,11 @@ export function createApp(deps: AppDeps): Express {
   app.disable('x-powered-by');
   app.use(pinoHttp({ logger: deps.log, wrapSerializers: false, serializers: logged }));
   app.use(securityHeaders(deps));
+  // One reader's data, and refusals, stay with no cache; a file that may be kept says so itself.
+  app.use('/api', (_request, response, next) => {
+    response.set('Cache-Control', 'no-store');
+    next();
+  });
   app.use('/api', requireOwnOrigin(deps.env));
   // Before express.json(): better-auth reads the body itself.
   app.all('/api/auth/*splat', onlyIdentityPaths, tellAddress, toNodeHandler(deps.auth));

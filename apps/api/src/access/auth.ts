@@ -77,6 +77,8 @@ export function createAuth(identityDb: Db, env: Pick<Env, 'AUTH_SECRET' | 'publi
     },
     // Only the sentence: what the library adds to it may hold a person's address.
     logger: { level: 'warn', log: (level, message) => seams.log[level]({ from: 'better-auth' }, message) },
+    // What fails is thrown to our own error handler: the library would print the failed query with its values.
+    onAPIError: { throw: true },
     telemetry: { enabled: false },
   });
 }

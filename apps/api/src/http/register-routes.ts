@@ -50,7 +50,7 @@ function handlerOf(deps: AppDeps, route: Route): RequestHandler {
 
 /** The reply was parsed on the way out too: what the contract does not name is not sent. */
 function send(response: Response, { status = 200 }: Route, reply: unknown): void {
-  response.set('Cache-Control', 'no-store').status(status).json(reply);
+  response.status(status).json(reply);
 }
 
 async function whoCalls(deps: AppDeps, route: Route, request: Request): Promise<Actor | Person | null> {

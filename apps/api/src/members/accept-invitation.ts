@@ -34,40 +34,43 @@ export async function showInvitation(deps: AppDeps, token: string): Promise<Invi
   return { firmName, name, email, roles, hasAccount: (await findAccount(deps, email)) !== null };
 }
 
-/** Makes the account where there is none yet, and the person a member. Somebody who has an account proves it with their password. */
+/**
+ * Makes the account where there is none yet, and the person a member. Somebody who has an account proves it with their password.
+ * The lock makes two acceptances of one invitation wait for each other.
+ */
 export async function acceptInvitation(deps: AppDeps, token: string, { password }: AcceptInvitation): Promise<void> {
-  const invitation = await findInvitation(deps, token);
-  const userId = (await provenAccount(deps, invitation.email, password)) ?? (await createAccount(deps, invitation, password));
-  const memberId = randomUUID();
-  await withFirm(deps.db, { firmId: invitation.firm_id, userId, clientId: invitation.client_id }, async (tx) => {
+  const { firm_id: firmId, client_id: clientId } = await findInvitation(deps, token);
+  const nobody = { firmId, userId: 'invitation', clientId };
+  await withFirm(deps.db, nobody, async (tx) => {
+    await tx.execute(sql`select pg_advisory_xact_lock(hashtextextended(${hashToken(token)}, 0))`);
+    const invitation = await findInvitation(deps, token);
+    const userId = await accountFor(deps, invitation, password);
+    await tx.execute(sql`select set_config('strandnote.user_id', ${userId}, true)`);
     const { rows } = await tx.execute<{ member_id: string }>(
-      sql`select * from accept_invitation(${hashToken(token)}, ${userId}, ${memberId}::uuid, ${deps.clock().toISOString()}::timestamptz)`,
+      sql`select * from accept_invitation(${hashToken(token)}, ${userId}, ${randomUUID()}::uuid, ${deps.clock().toISOString()}::timestamptz)`,
     );
-    if (!rows[0]) throw new AppError('gone', 'This invitation has been used or is too old. Ask for a new one.');
-    const actor = { firmId: invitation.firm_id, userId, name: invitation.name };
-    await recordEvent(
-      tx,
-      actor,
-      'member.joined',
-      { kind: 'member', id: rows[0].member_id },
-      { email: invitation.email, roles: invitation.roles },
-      deps.clock(),
-    );
+    const { email, name, roles } = invitation;
+    const member = { kind: 'member', id: rows[0]!.member_id };
+    await recordEvent(tx, { firmId, userId, name }, 'member.joined', member, { email, roles }, deps.clock());
   });
+}
+
+async function accountFor(deps: AppDeps, person: { name: string; email: string }, password: string): Promise<string> {
+  const found = await findAccount(deps, person.email);
+  if (!found) return createAccount(deps, person, password);
+  const context = await deps.auth.$context;
+  const hash = found.accounts.find(({ providerId }) => providerId === 'credential')?.password;
+  // Left behind by an acceptance that broke off; whoever holds the link has the mailbox and may finish it.
+  if (!hash) await linkPassword(deps, found.user.id, password);
+  else if (!(await context.password.verify({ hash, password }))) {
+    throw AppError.ofField('password', 'You have an account already: type its password.');
+  }
+  return found.user.id;
 }
 
 async function findAccount(deps: AppDeps, email: string) {
   const context = await deps.auth.$context;
   return context.internalAdapter.findUserByEmail(email, { includeAccounts: true });
-}
-
-async function provenAccount(deps: AppDeps, email: string, password: string): Promise<string | null> {
-  const context = await deps.auth.$context;
-  const found = await findAccount(deps, email);
-  if (!found) return null;
-  const hash = found.accounts.find(({ providerId }) => providerId === 'credential')?.password;
-  if (hash && (await context.password.verify({ hash, password }))) return found.user.id;
-  throw AppError.ofField('password', 'You have an account already: type its password.');
 }
 
 /** Makes an account of better-auth past its sign-up, which is off. */
@@ -81,11 +84,12 @@ export async function createAccount(
     { name: person.name, email: person.email.toLowerCase(), emailVerified: true },
     { method: 'email-password' },
   );
-  await context.internalAdapter.linkAccount({
-    userId: user.id,
-    providerId: 'credential',
-    accountId: user.id,
-    password: await context.password.hash(password),
-  });
+  await linkPassword(deps, user.id, password);
   return user.id;
+}
+
+async function linkPassword(deps: Pick<AppDeps, 'auth'>, userId: string, password: string): Promise<void> {
+  const context = await deps.auth.$context;
+  const hash = await context.password.hash(password);
+  await context.internalAdapter.linkAccount({ userId, providerId: 'credential', accountId: userId, password: hash });
 }
