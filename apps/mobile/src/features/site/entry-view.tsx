@@ -49,7 +49,14 @@ export function EntryView(props: EntryViewProps) {
   }
   const progress = progressOf(rows);
   const main = (
-    <EntryMain {...props} entry={{ ...entry, draft, findings }} saving={saving} neighbours={{ previous, following }} hrefOf={hrefOf} />
+    <EntryMain
+      {...props}
+      entry={{ ...entry, draft, findings }}
+      saving={saving}
+      neighbours={{ previous, following }}
+      hrefOf={hrefOf}
+      onExcused={() => goTo(next)}
+    />
   );
   return (
     <Page
