@@ -14,15 +14,16 @@ export function SaveEstimates({ survey, rows }: { survey: CampaignDetail; rows: 
   const { entries } = useOutbox();
   const [saved, setSaved] = useState<SavedEstimates | null>(null);
   const measured = rows.filter(({ state }) => state === 'measured');
-  const unsaved = measured.filter((row) => !row.saved).length;
+  const unsaved = measured.filter((row) => row.output !== null && !row.saved).length;
+  const impossible = measured.filter((row) => row.output === null).length;
   const waiting = entries.filter(({ path }) => path.includes(`/campaigns/${survey.id}/`)).length;
-  const why = whyNot({ waiting, measured: measured.length, unsaved, open: survey.state === 'open' });
+  const why = whyNot({ waiting, measured: measured.length, unsaved: unsaved + impossible, open: survey.state === 'open' });
   return (
     <Panel>
       <Heading level={2} size="lead">
         Estimates and report
       </Heading>
-      <Text>{keptWords(measured.length, unsaved)}</Text>
+      <Text>{keptWords(measured.length - impossible, unsaved, impossible)}</Text>
       <Row align="flex-start">
         <Button onPress={() => save.mutate(null, { onSuccess: setSaved })} busy={save.isPending} why={why}>
           Save estimates
@@ -37,10 +38,12 @@ export function SaveEstimates({ survey, rows }: { survey: CampaignDetail; rows: 
   );
 }
 
-function keptWords(measured: number, unsaved: number): string {
-  if (measured === 0) return 'What is measured is computed again by the server and kept; a report starts from that.';
-  if (unsaved === 0) return `All ${measured} tensions are kept on the server with their inputs.`;
-  return `${unsaved} of ${measured} tensions were computed on this device only. The server computes them again and keeps its own.`;
+function keptWords(tensions: number, unsaved: number, impossible: number): string {
+  const refused =
+    impossible === 0 ? '' : ` ${impossible} measured ${impossible === 1 ? 'cable' : 'cables'} cannot be estimated as entered.`;
+  if (tensions === 0) return `What is measured is computed again by the server and kept; a report starts from that.${refused}`;
+  if (unsaved === 0) return `All ${tensions} tensions are kept on the server with their inputs.${refused}`;
+  return `${unsaved} of ${tensions} tensions were computed on this device only. The server computes them again and keeps its own.${refused}`;
 }
 
 function whyNot({
