@@ -3,6 +3,7 @@ import { type Formula, setFormula } from './formula.ts';
 import { type Publication, publications } from './publications.ts';
 import type { Report } from './report-input.ts';
 import { marked, styles } from './text-layout.ts';
+import { listed } from './words.ts';
 
 interface Step {
   title: string;
@@ -120,7 +121,9 @@ export function setMethod({ sheet, content, rows }: Report): void {
   const cited = new Set<Publication>([...used.flatMap(({ sources }) => sources), 'gum', 'ilac']);
   for (const name of cited) sheet.paragraph(publications[name], styles.noteInk, { after: 1.5 });
   sheet.space(3);
-  sheet.paragraph(`All tensions were computed by the engine of Strandnote, version ${content.engineVersion}.`, styles.noteInk);
+  const versions = [...new Set(estimates.map(({ engineVersion }) => engineVersion))];
+  const named = versions.length === 0 ? content.engineVersion : listed(versions);
+  sheet.paragraph(`The tensions were computed by the engine of Strandnote, version ${named}.`, styles.noteInk);
 }
 
 function setStep(sheet: Report['sheet'], { title, text, formulas }: Step): void {

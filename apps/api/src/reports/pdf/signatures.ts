@@ -17,7 +17,7 @@ export function setSignatures(report: Report): void {
   sheet.paragraph(
     input.draft
       ? 'Not issued.'
-      : `This file is issued by the electronic signature that it carries (PAdES B-B, in the name of ${content.firm.name}). The time of issue stands in that signature. A copy without a valid signature is not the issued report.`,
+      : `This file is issued by the electronic signature that it carries (PAdES B-B, in the name of ${content.firm.name}). The time of issue stands in that signature. A copy without a valid signature is not the issued report.${content.firm.demonstration ? ' This is a demonstration: the certificate of that signature proves nothing.' : ''}`,
   );
   sheet.heading(3, 'Seals of the content');
   setDefinitions(
