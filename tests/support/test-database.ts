@@ -2,7 +2,7 @@ import { createHash, randomBytes } from 'node:crypto';
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { prepareDatabase, type RoleUrls } from '@strandnote/db';
+import { grantDatabase, prepareDatabase, type RoleUrls } from '@strandnote/db';
 import pg from 'pg';
 
 export interface TestDatabase {
@@ -27,7 +27,6 @@ export async function createTestDatabase(): Promise<TestDatabase> {
     await client.query('select pg_advisory_lock(702315)');
     const template = await ensureTemplate(client, clusterUrl);
     await client.query(`create database ${name} template ${template}`);
-    await client.query(`grant create on database ${name} to strandnote_jobs`);
   });
   const urlAs = (role?: keyof typeof passwords) => {
     const url = new URL(clusterUrl);
@@ -38,6 +37,7 @@ export async function createTestDatabase(): Promise<TestDatabase> {
     }
     return url.toString();
   };
+  await withClient(urlAs(), grantDatabase);
   return {
     urls: { owner: urlAs('owner'), identity: urlAs('identity'), app: urlAs('app'), jobs: urlAs('jobs') },
     superuserUrl: urlAs(),

@@ -16,10 +16,10 @@ export type RoleUrls = Record<keyof RolePasswords, string>;
 
 const roles: Record<keyof RolePasswords, { name: string; rights: string }> = {
   // Owns the tables. Row-level security is forced on owners too, and functions across firms run as this role.
-  owner: { name: 'strandnote_owner', rights: 'NOSUPERUSER BYPASSRLS' },
-  identity: { name: 'strandnote_identity', rights: 'NOSUPERUSER NOBYPASSRLS' },
-  app: { name: 'strandnote_app', rights: 'NOSUPERUSER NOBYPASSRLS' },
-  jobs: { name: 'strandnote_jobs', rights: 'NOSUPERUSER NOBYPASSRLS' },
+  owner: { name: 'strandnote_owner', rights: 'BYPASSRLS' },
+  identity: { name: 'strandnote_identity', rights: 'NOBYPASSRLS' },
+  app: { name: 'strandnote_app', rights: 'NOBYPASSRLS' },
+  jobs: { name: 'strandnote_jobs', rights: 'NOBYPASSRLS' },
 };
 
 /**
@@ -32,21 +32,33 @@ const roles: Record<keyof RolePasswords, { name: string; rights: string }> = {
 export async function prepareDatabase(superuserUrl: string, passwords: RolePasswords): Promise<RoleUrls> {
   const urls = roleUrls(superuserUrl, passwords);
   await asSuperuser(superuserUrl, async (client) => {
-    for (const [role, { name, rights }] of Object.entries(roles)) {
-      await client.query(`DO $$ BEGIN CREATE ROLE ${name} LOGIN; EXCEPTION WHEN duplicate_object THEN NULL; END $$`);
-      await client.query(`ALTER ROLE ${name} LOGIN ${rights} PASSWORD ${pg.escapeLiteral(passwords[role as keyof RolePasswords])}`);
-    }
-    const { rows } = await client.query<{ name: string }>('SELECT current_database() AS name');
-    const database = pg.escapeIdentifier(rows[0]!.name);
-    await client.query(`REVOKE ALL ON DATABASE ${database} FROM PUBLIC`);
-    await client.query(`GRANT CONNECT ON DATABASE ${database} TO strandnote_owner, strandnote_identity, strandnote_app, strandnote_jobs`);
-    await client.query(`GRANT CREATE ON DATABASE ${database} TO strandnote_owner, strandnote_jobs`);
-    await client.query('ALTER SCHEMA public OWNER TO strandnote_owner; REVOKE CREATE ON SCHEMA public FROM PUBLIC');
+    // Of several installations' processes that start at once, one migrates and the others find it done. The lock ends with the session.
+    await client.query('SELECT pg_advisory_lock(702316)');
+    await prepareRoles(client, passwords);
+    await migrateTables(urls.owner);
+    await runMigrations({ connectionString: urls.jobs });
+    await makeQueueDoor(client);
   });
-  await migrateTables(urls.owner);
-  await runMigrations({ connectionString: urls.jobs });
-  await asSuperuser(superuserUrl, makeQueueDoor);
   return urls;
+}
+
+async function prepareRoles(client: pg.Client, passwords: RolePasswords): Promise<void> {
+  for (const [role, { name, rights }] of Object.entries(roles)) {
+    await client.query(`DO $$ BEGIN CREATE ROLE ${name} LOGIN; EXCEPTION WHEN duplicate_object OR unique_violation THEN NULL; END $$`);
+    const password = pg.escapeLiteral(passwords[role as keyof RolePasswords]);
+    await client.query(`ALTER ROLE ${name} LOGIN NOSUPERUSER NOCREATEROLE NOCREATEDB NOREPLICATION ${rights} PASSWORD ${password}`);
+  }
+  await client.query('ALTER SCHEMA public OWNER TO strandnote_owner; REVOKE CREATE ON SCHEMA public FROM PUBLIC');
+  await grantDatabase(client);
+}
+
+/** Rights on the database itself, which a copy of it does not take over. */
+export async function grantDatabase(client: pg.Client): Promise<void> {
+  const { rows } = await client.query<{ name: string }>('SELECT current_database() AS name');
+  const database = pg.escapeIdentifier(rows[0]!.name);
+  await client.query(`REVOKE ALL ON DATABASE ${database} FROM PUBLIC`);
+  await client.query(`GRANT CONNECT ON DATABASE ${database} TO strandnote_owner, strandnote_identity, strandnote_app, strandnote_jobs`);
+  await client.query(`GRANT CREATE ON DATABASE ${database} TO strandnote_owner, strandnote_jobs`);
 }
 
 /** Makes a database where there is none of that name. @returns its address as the superuser */
@@ -83,7 +95,7 @@ async function migrateTables(ownerUrl: string): Promise<void> {
 async function makeQueueDoor(client: pg.Client): Promise<void> {
   await client.query(`
     CREATE OR REPLACE FUNCTION public.enqueue(task text, payload jsonb) RETURNS void
-      LANGUAGE plpgsql SECURITY DEFINER SET search_path = pg_catalog AS $$
+      LANGUAGE plpgsql SECURITY DEFINER SET search_path = pg_catalog, pg_temp AS $$
     BEGIN
       PERFORM graphile_worker.add_job(task, (payload || jsonb_build_object(
         'firmId', nullif(current_setting('strandnote.firm_id', true), ''),
