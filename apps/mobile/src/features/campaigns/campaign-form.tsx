@@ -40,7 +40,6 @@ export function CampaignForm({ form, onSubmit, first }: CampaignFormProps) {
               control={control}
               name="startsOn"
               label="First day"
-              figures
               autoComplete="off"
               check={(text) => problemOfDay(text, { name: 'The first day', required: true })}
             />,
@@ -50,7 +49,6 @@ export function CampaignForm({ form, onSubmit, first }: CampaignFormProps) {
               name="endsOn"
               label="Last day"
               optional
-              figures
               autoComplete="off"
               check={(text) => problemOfDay(text, { name: 'The last day' }) ?? notBefore(text, startsOn)}
             />,

@@ -49,7 +49,6 @@ function Instrument({ form, index, onRemove }: { form: UseFormReturn<CampaignVal
             label="Serial number"
             optional
             maxLength={60}
-            figures
           />,
         ]}
       </Columns>
@@ -61,7 +60,6 @@ function Instrument({ form, index, onRemove }: { form: UseFormReturn<CampaignVal
             name={`instruments.${index}.calibratedOn`}
             label="Calibrated on"
             optional
-            figures
             autoComplete="off"
             check={(text) => problemOfDay(text, { name: 'The day of the calibration' })}
           />,
@@ -71,7 +69,6 @@ function Instrument({ form, index, onRemove }: { form: UseFormReturn<CampaignVal
             name={`instruments.${index}.calibrationDue`}
             label="Calibration due"
             optional
-            figures
             autoComplete="off"
             check={(text) => problemOfDay(text, { name: 'The day when calibration is due' })}
           />,
