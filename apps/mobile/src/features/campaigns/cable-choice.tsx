@@ -2,8 +2,8 @@ import type { Structure } from '@strandnote/api/contract';
 import { type UseFormReturn, useController, useWatch } from 'react-hook-form';
 import { useFirm } from '../../lib/session.tsx';
 import { Button, Checkbox, FormChoice, FormSelect, Heading, Loading, Panel, Problem, Row, Stack, Text } from '../../ui/index.ts';
+import { useCablesQuery } from '../structures/structures.api.ts';
 import type { CampaignValues } from './campaign-form-values.ts';
-import { useCableChoiceQuery } from './campaigns.api.ts';
 
 interface CableChoiceProps {
   form: UseFormReturn<CampaignValues>;
@@ -47,7 +47,7 @@ export function CableChoice({ form, structures }: CableChoiceProps) {
 
 function ChosenCables({ form, structureId }: { form: UseFormReturn<CampaignValues>; structureId: string }) {
   const firm = useFirm();
-  const cables = useCableChoiceQuery(firm.firmId, structureId);
+  const cables = useCablesQuery(firm.firmId, structureId);
   const { field, fieldState } = useController({
     control: form.control,
     name: 'cableIds',

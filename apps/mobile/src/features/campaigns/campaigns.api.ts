@@ -1,6 +1,5 @@
 import {
   type CreateCampaign,
-  cableList,
   campaign,
   campaignDetail,
   campaignList,
@@ -8,7 +7,6 @@ import {
   type EditCampaign,
   editCampaign,
   savedEstimates,
-  structureList,
 } from '@strandnote/api/contract';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { firmPath, get, send } from '../../lib/api-client.ts';
@@ -27,22 +25,6 @@ export function useCampaignQuery(firmId: string, campaignId: string) {
   return useQuery({
     queryKey: campaignKey(firmId, campaignId),
     queryFn: ({ signal }) => get(firmPath(firmId, 'campaigns', campaignId), campaignDetail, signal),
-  });
-}
-
-export function useStructureChoiceQuery(firmId: string) {
-  return useQuery({
-    queryKey: ['firm', firmId, 'structures'],
-    queryFn: ({ signal }) => get(firmPath(firmId, 'structures'), structureList, signal),
-  });
-}
-
-/** The cables that a campaign on this structure may cover; none until the structure is chosen. */
-export function useCableChoiceQuery(firmId: string, structureId: string | null) {
-  return useQuery({
-    queryKey: ['firm', firmId, 'structures', structureId, 'cables'],
-    queryFn: ({ signal }) => get(firmPath(firmId, 'structures', structureId ?? '', 'cables'), cableList, signal),
-    enabled: structureId !== null,
   });
 }
 

@@ -5,16 +5,17 @@ import { useForm } from 'react-hook-form';
 import { showProblem } from '../../lib/form-problems.ts';
 import { useFirm } from '../../lib/session.tsx';
 import { Button, Empty, Loading, Page, Problem } from '../../ui/index.ts';
+import { useStructuresQuery } from '../structures/structures.api.ts';
 import { CableChoice } from './cable-choice.tsx';
 import { CampaignForm } from './campaign-form.tsx';
 import { campaignFields, newCampaignValues } from './campaign-form-values.ts';
 import { fieldOfCampaign } from './campaign-problems.ts';
-import { useCreateCampaignMutation, useStructureChoiceQuery } from './campaigns.api.ts';
+import { useCreateCampaignMutation } from './campaigns.api.ts';
 
 /** Opens a campaign on a structure. */
 export function CreateCampaignScreen() {
   const firm = useFirm();
-  const structures = useStructureChoiceQuery(firm.firmId);
+  const structures = useStructuresQuery(firm.firmId);
   const title = 'Open a campaign';
   if (structures.isPending) return <Page title={title}>{<Loading what="the structures" />}</Page>;
   if (structures.isError) return <Page title={title}>{<Problem error={structures.error} onRetry={structures.refetch} />}</Page>;

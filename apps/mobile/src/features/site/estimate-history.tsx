@@ -1,12 +1,11 @@
-import { type CampaignDetail, cableDetail, type TensionOfCampaign } from '@strandnote/api/contract';
+import type { CampaignDetail, TensionOfCampaign } from '@strandnote/api/contract';
 import { formatInterval } from '@strandnote/core';
-import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import { firmPath, get } from '../../lib/api-client.ts';
 import { useFirm } from '../../lib/session.tsx';
 import { showDay, showTime } from '../../lib/show-time.ts';
 import { type Units, useUnits } from '../../lib/units.tsx';
 import { type Column, DataTable, Empty, Heading, Loading, Problem, Stack, Tag, Text } from '../../ui/index.ts';
+import { useCableQuery } from '../cables/cables.api.ts';
 import { type ChecklistRow, visitsOf } from './checklist-rows.ts';
 
 interface HistoryRow {
@@ -24,10 +23,7 @@ export function EstimateHistory({ survey, row }: { survey: CampaignDetail; row: 
   const firm = useFirm();
   const units = useUnits();
   const { cable } = row.entry;
-  const history = useQuery({
-    queryKey: ['firm', firm.firmId, 'cable', cable.id],
-    queryFn: ({ signal }) => get(firmPath(firm.firmId, 'cables', cable.id), cableDetail, signal),
-  });
+  const history = useCableQuery(firm.firmId, cable.id);
   const earlier = history.data?.history;
   const rows = useMemo(
     () => [...savedRows(survey, row, units), ...earlierRows(earlier ?? [], survey, row.key, units)],
