@@ -36,10 +36,9 @@ export function createApp(deps: AppDeps): Express {
   // Before express.json(): better-auth reads the body itself.
   app.all('/api/auth/*splat', onlyIdentityPaths, tellAddress, toNodeHandler(deps.auth));
   app.use('/api/v1', express.json({ limit: '2mb' }), registerRoutes(deps, routes));
-  app.use('/api', () => {
-    throw new AppError('not-found', 'There is no such address in this API.');
-  });
+  app.use('/api', refuseAddress);
   if (deps.env.WEB_ROOT !== undefined) app.use(serveWebApp(deps.env.WEB_ROOT));
+  app.use(refuseAddress);
   app.use(errorHandler);
   return app;
 }
@@ -62,13 +61,18 @@ function securityHeaders(deps: AppDeps): RequestHandler {
     },
     strictTransportSecurity: secure,
     referrerPolicy: { policy: 'same-origin' },
+    xFrameOptions: { action: 'deny' },
   });
 }
 
-const onlyIdentityPaths: RequestHandler = (request, _response, next) => {
+const onlyIdentityPaths: RequestHandler = (request, response, next) => {
   const path = request.path.replace(/^\/api\/auth/, '');
-  if (!identityPaths.some((allowed) => allowed === path)) throw new AppError('not-found', 'There is no such address in this API.');
+  if (!identityPaths.some((allowed) => allowed === path)) return refuseAddress(request, response, next);
   next();
+};
+
+const refuseAddress: RequestHandler = () => {
+  throw new AppError('not-found', 'There is no such address here.');
 };
 
 /** The address that rate limits count by comes from Express, which knows the trusted proxies; a header of the caller's does not count. */
