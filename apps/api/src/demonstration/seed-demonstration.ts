@@ -122,5 +122,5 @@ const weirTexts = {
   conditions: 'Overcast, 12 °C steel temperature, light wind, one lane closed.',
   deviations: 'None.',
   conclusion:
-    'The intervals are set against 0.90 to 1.10 of the design tension as agreed. The shortest hangers bend as much as they pull: for them only bounds are given.',
+    'The intervals are set against 0.90 to 1.10 of the design tension as agreed. Hanger H-06n lies below its lower limit; whether anything follows from it is for the licensed engineer of the owner to decide.',
 };

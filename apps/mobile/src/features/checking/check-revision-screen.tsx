@@ -45,13 +45,14 @@ function CheckView({ revision, cableId }: { revision: Revision; cableId: string 
     >
       {revision.may.tick ? <Notice kind="caution">{revision.may.tick}</Notice> : null}
       <StructureElevation content={revision.content} rows={rows} hrefOf={(id) => `${here}?cable=${id}`} />
-      <Columns shares={current ? [3, 2] : [1, 0]}>
+      <Columns shares={current ? [1, 1] : [1, 0]}>
         <Stack>
           <ResultsTable
             caption="Cables of the revision, doubtful ones first"
             rows={rows}
             hrefOf={(row) => `${here}?cable=${row.cable.id}`}
             currentKey={current?.key ?? null}
+            compact={current !== null}
             last={last}
           />
           <Caution unchecked={revision.state === 'in check'} conditions={conditionsOf(revision)} />

@@ -41,7 +41,9 @@ export function SpanEvidence({ row, heading }: { row: ResultRow; heading: string
         </Notice>
       ))}
       {estimate ? <Fit estimate={estimate} peaks={span.measurement?.peaks ?? []} /> : null}
-      <Heading level={4}>Inputs</Heading>
+      <Heading level={3} size="body">
+        Inputs
+      </Heading>
       <Definitions items={inputDefinitions(span, units)} />
     </Stack>
   );
@@ -55,9 +57,13 @@ function Fit({ estimate, peaks }: { estimate: Estimate; peaks: readonly FrozenPe
     <>
       <FitPlot peaks={peaks} curves={[{ name: 'fitted model', values: fitted }]} />
       <ResidualPlot residuals={output.residuals.map(({ mode, relative }) => ({ mode, residual: relative, used: true }))} />
-      <Heading level={4}>Peaks</Heading>
+      <Heading level={3} size="body">
+        Peaks
+      </Heading>
       <PeaksTable estimate={estimate} peaks={peaks} />
-      <Heading level={4}>Models side by side</Heading>
+      <Heading level={3} size="body">
+        Models side by side
+      </Heading>
       <Definitions
         items={output.models.map((model) => ({
           term: model.name,

@@ -12,14 +12,19 @@ export interface ResultsTableProps {
   rows: readonly ResultRow[];
   hrefOf?: (row: ResultRow) => string;
   currentKey?: string | null;
+  /** Something stands beside the table: only what the eye compares is kept. */
+  compact?: boolean;
   /** A last column of the caller's own: the state of the check. */
   last?: { header: string; cell: (row: ResultRow) => ReactNode };
 }
 
 /** All cables on one scale, so that the eye runs down the column and stops at the one that does not fit. */
-export function ResultsTable({ caption, rows, hrefOf, currentKey, last }: ResultsTableProps) {
+export function ResultsTable({ caption, rows, hrefOf, currentKey, compact = false, last }: ResultsTableProps) {
   const units = useUnits();
-  const columns = useMemo(() => resultColumns(rows, units, last), [rows, units, last]);
+  const columns = useMemo(() => {
+    const all = resultColumns(rows, units, last);
+    return compact ? all.filter(({ key }) => !leftOutBeside.has(key)) : all;
+  }, [rows, units, last, compact]);
   return (
     <DataTable
       caption={caption}
@@ -31,6 +36,8 @@ export function ResultsTable({ caption, rows, hrefOf, currentKey, last }: Result
     />
   );
 }
+
+const leftOutBeside = new Set(['reference', 'to-reference', 'last-survey']);
 
 function resultColumns(rows: readonly ResultRow[], units: Units, last: ResultsTableProps['last']): Column<ResultRow>[] {
   const onReference = rows.some((row) => shareOfReference(row.bar) !== null);

@@ -1,4 +1,5 @@
 import { useSyncExternalStore } from 'react';
+import { View } from 'react-native';
 import { subscribeToUpdates, takeUpdate, updateWaits } from '../../lib/service-worker.ts';
 import { Button, Notice, Row, Text } from '../../ui/index.ts';
 
@@ -7,11 +8,13 @@ export function UpdatePrompt() {
   const waits = useSyncExternalStore(subscribeToUpdates, updateWaits);
   if (!waits) return null;
   return (
-    <Notice>
-      <Row justify="space-between">
-        <Text>A newer version of Strandnote is ready. What you typed and saved stays.</Text>
-        <Button onPress={takeUpdate}>Reload now</Button>
-      </Row>
-    </Notice>
+    <View role="region" aria-label="Update">
+      <Notice>
+        <Row justify="space-between">
+          <Text>A newer version of Strandnote is ready. What you typed and saved stays.</Text>
+          <Button onPress={takeUpdate}>Reload now</Button>
+        </Row>
+      </Notice>
+    </View>
   );
 }

@@ -1,0 +1,100 @@
+import { mkdirSync } from 'node:fs';
+import { fileURLToPath } from 'node:url';
+import AxeBuilder from '@axe-core/playwright';
+import { type Browser, type BrowserContext, chromium, type Page } from 'playwright-core';
+import { expect } from 'vitest';
+import type { DemonstrationAccount, RunningApp } from './running-app.ts';
+
+const pictures = fileURLToPath(new URL('../../.data/pictures', import.meta.url));
+
+export const screens = [
+  { name: 'phone', width: 390, height: 844 },
+  { name: 'wide', width: 1440, height: 900 },
+] as const;
+export type Screen = (typeof screens)[number];
+
+export function openBrowser(): Promise<Browser> {
+  return chromium.launch({
+    executablePath: '/usr/bin/chromium',
+    args: [
+      ...['--headless', '--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run'],
+      ...['--disable-background-networking', '--disable-component-update', '--disable-sync'],
+    ],
+  });
+}
+
+/** One person at one screen, signed in unless nobody is named. Errors of the page fail the test that caused them. */
+export class Visitor {
+  readonly faults: string[] = [];
+  private constructor(
+    readonly context: BrowserContext,
+    readonly page: Page,
+    readonly app: RunningApp,
+    readonly screen: Screen,
+    /** The address of the firm. */
+    readonly firm: string,
+  ) {}
+
+  static async arrive(browser: Browser, app: RunningApp, screen: Screen, role: DemonstrationAccount['role'] | null): Promise<Visitor> {
+    const context = await browser.newContext({
+      viewport: { width: screen.width, height: screen.height },
+      acceptDownloads: true,
+      reducedMotion: 'reduce',
+    });
+    const page = await context.newPage();
+    page.setDefaultTimeout(15_000);
+    let firm = '';
+    if (role !== null) {
+      const account = app.accounts.find((candidate) => candidate.role === role)!;
+      await page.goto(`${app.address}/sign-in`);
+      await page.getByLabel('E-mail address').fill(account.email);
+      await page.getByLabel('Password', { exact: true }).fill(account.password);
+      await page.getByRole('button', { name: 'Sign in' }).click();
+      await page.waitForURL(/\/[0-9a-f-]{36}\//);
+      firm = `/${new URL(page.url()).pathname.split('/')[1]}`;
+    }
+    const visitor = new Visitor(context, page, app, screen, firm);
+    page.on('pageerror', (error) => visitor.faults.push(error.message));
+    return visitor;
+  }
+
+  async open(path: string): Promise<void> {
+    await this.page.goto(this.app.address + path);
+  }
+
+  /** Waits for the title, keeps a picture, and finds nothing that shuts anybody out (axe, WCAG 2.2 AA and best practice). */
+  async sees(title: string | RegExp): Promise<void> {
+    const heading = this.page.getByRole('heading', { level: 1, name: title });
+    await heading.waitFor();
+    await this.page.getByText('Loading').waitFor({ state: 'detached' });
+    const name = `${String(title).replace(/\W+/g, '-')}-${this.screen.name}.png`.replace(/^-/, '');
+    mkdirSync(pictures, { recursive: true });
+    await this.page.screenshot({ path: `${pictures}/${name}`, fullPage: true });
+    const { violations } = await new AxeBuilder({ page: this.page }).analyze();
+    expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`)).toEqual([]);
+    const sideways = await this.page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+    expect(sideways, 'the page scrolls sideways').toBeLessThanOrEqual(0);
+  }
+
+  /** A request from the page itself, with its cookie and origin. */
+  async send(method: string, path: string, body: unknown): Promise<unknown> {
+    const reply = await this.page.evaluate(
+      async ({ method, path, body }) => {
+        const answer = await fetch(`/api/v1/firms${path}`, {
+          method,
+          headers: { 'content-type': 'application/json' },
+          body: JSON.stringify(body),
+        });
+        return { status: answer.status, json: await answer.json() };
+      },
+      { method, path: this.firm + path, body },
+    );
+    expect(reply.status, JSON.stringify(reply.json)).toBeLessThan(300);
+    return reply.json;
+  }
+
+  async leave(): Promise<void> {
+    expect(this.faults).toEqual([]);
+    await this.context.close();
+  }
+}
