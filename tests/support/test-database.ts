@@ -13,7 +13,7 @@ export interface TestDatabase {
 }
 
 // One set of passwords for all: roles belong to the cluster, which several test files use at once.
-const passwords = { owner: 'owner-in-test', identity: 'identity-in-test', app: 'app-in-test', jobs: 'jobs-in-test' };
+export const rolePasswords = { owner: 'owner-in-test', identity: 'identity-in-test', app: 'app-in-test', jobs: 'jobs-in-test' };
 const roleNames = { owner: 'strandnote_owner', identity: 'strandnote_identity', app: 'strandnote_app', jobs: 'strandnote_jobs' };
 
 /** A database of its own for a test file: a copy of one template that is migrated once for all. */
@@ -28,12 +28,12 @@ export async function createTestDatabase(): Promise<TestDatabase> {
     const template = await ensureTemplate(client, clusterUrl);
     await client.query(`create database ${name} template ${template}`);
   });
-  const urlAs = (role?: keyof typeof passwords) => {
+  const urlAs = (role?: keyof typeof rolePasswords) => {
     const url = new URL(clusterUrl);
     url.pathname = `/${name}`;
     if (role) {
       url.username = roleNames[role];
-      url.password = passwords[role];
+      url.password = rolePasswords[role];
     }
     return url.toString();
   };
@@ -55,7 +55,7 @@ async function ensureTemplate(client: pg.Client, clusterUrl: string): Promise<st
   await client.query(`create database ${unfinished}`);
   const url = new URL(clusterUrl);
   url.pathname = `/${unfinished}`;
-  await prepareDatabase(url.toString(), passwords);
+  await prepareDatabase(url.toString(), rolePasswords);
   await client.query(`alter database ${unfinished} rename to ${name}`);
   return name;
 }

@@ -43,13 +43,17 @@ export async function prepareDatabase(superuserUrl: string, passwords: RolePassw
 }
 
 async function prepareRoles(client: pg.Client, passwords: RolePasswords): Promise<void> {
+  // Roles belong to the cluster, whose other databases may be prepared at this moment: an advisory lock would not be seen there.
+  await client.query('BEGIN');
+  await client.query('LOCK TABLE pg_authid IN SHARE ROW EXCLUSIVE MODE');
   for (const [role, { name, rights }] of Object.entries(roles)) {
-    await client.query(`DO $$ BEGIN CREATE ROLE ${name} LOGIN; EXCEPTION WHEN duplicate_object OR unique_violation THEN NULL; END $$`);
+    await client.query(`DO $$ BEGIN CREATE ROLE ${name} LOGIN; EXCEPTION WHEN duplicate_object THEN NULL; END $$`);
     const password = pg.escapeLiteral(passwords[role as keyof RolePasswords]);
     await client.query(`ALTER ROLE ${name} LOGIN NOSUPERUSER NOCREATEROLE NOCREATEDB NOREPLICATION ${rights} PASSWORD ${password}`);
   }
   await client.query('ALTER SCHEMA public OWNER TO strandnote_owner; REVOKE CREATE ON SCHEMA public FROM PUBLIC');
   await grantDatabase(client);
+  await client.query('COMMIT');
 }
 
 /** Rights on the database itself, which a copy of it does not take over. */
