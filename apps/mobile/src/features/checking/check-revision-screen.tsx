@@ -20,7 +20,7 @@ export function CheckRevisionScreen() {
   const firm = useFirm();
   const { revision: revisionId, cable } = useLocalSearchParams<{ revision: string; cable?: string }>();
   const revision = useRevisionQuery(firm.firmId, revisionId);
-  if (revision.isPending) return <Page title="Check">{<Loading />}</Page>;
+  if (revision.isPending || revision.isOutdated) return <Page title="Check">{<Loading />}</Page>;
   if (revision.isError) return <Page title="Check">{<Problem error={revision.error} onRetry={revision.refetch} />}</Page>;
   return <CheckView revision={revision.data} cableId={cable ?? null} />;
 }

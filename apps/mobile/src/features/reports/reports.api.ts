@@ -18,13 +18,16 @@ import { firmPath, get, send } from '../../lib/api-client.ts';
 
 export const revisionKey = (firmId: string, revisionId: string) => ['firm', firmId, 'revision', revisionId] as const;
 
+/** A revision as it stands now: a signature names the content that was looked at, so that a kept copy is shown only offline. */
 export function useRevisionQuery(firmId: string, revisionId: string) {
-  return useQuery({
+  const query = useQuery({
     queryKey: revisionKey(firmId, revisionId),
     queryFn: ({ signal }) => get(firmPath(firmId, 'revisions', revisionId), revision, signal),
+    staleTime: 0,
     // The PDF of an approved revision is rendered in the background.
     refetchInterval: ({ state }) => (state.data?.state === 'approved' && !state.data.pdfReady ? 1500 : false),
   });
+  return { ...query, isOutdated: query.isFetching && !query.isFetchedAfterMount };
 }
 
 export function useReportsQuery(firmId: string) {

@@ -20,7 +20,7 @@ export function RevisionScreen() {
   const firm = useFirm();
   const { revision: revisionId } = useLocalSearchParams<{ revision: string }>();
   const revision = useRevisionQuery(firm.firmId, revisionId);
-  if (revision.isPending) return <Page title="Report">{<Loading />}</Page>;
+  if (revision.isPending || revision.isOutdated) return <Page title="Report">{<Loading />}</Page>;
   if (revision.isError) return <Page title="Report">{<Problem error={revision.error} onRetry={revision.refetch} />}</Page>;
   return <RevisionView revision={revision.data} />;
 }
