@@ -1,7 +1,7 @@
 // Finds or installs Debian's PostgreSQL and runs a private cluster on loopback. Packages may not be imported here.
 import { execFileSync, spawnSync } from 'node:child_process';
 import { createHash, randomBytes } from 'node:crypto';
-import { chownSync, existsSync, mkdirSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { chownSync, existsSync, mkdirSync, readdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { installDebian } from '../../../apps/api/bin/bootstrap.mjs';
 
@@ -21,7 +21,8 @@ function findBinaries() {
 function binaries() {
   const found = findBinaries();
   if (found) return found;
-  installDebian({ '/usr/lib/postgresql': 'postgresql' });
+  // Named by a path that never exists: where only the client programs are installed, the folder of the server is there already.
+  installDebian({ '/usr/lib/postgresql/bin/initdb': 'postgresql' });
   const installed = findBinaries();
   if (!installed)
     throw new Error('PostgreSQL was installed, but its initdb was not found. Install the package "postgresql" and start again.');
@@ -36,8 +37,8 @@ function asServerAccount(command, args) {
 
 /** The server's account must be able to walk through every parent folder; where it cannot, the cluster lies under /var/tmp. */
 function reachableHome(home) {
+  makeFolder(home);
   if (!isRoot) return home;
-  mkdirSync(home, { recursive: true, mode: 0o755 });
   const [command, args] = asServerAccount('test', ['-x', home]);
   if (spawnSync(command, args).status === 0) return home;
   return join('/var/tmp', `strandnote-${createHash('sha256').update(home).digest('hex').slice(0, 12)}`);
@@ -85,23 +86,31 @@ export function startCluster({ home: wantedHome, port, durable }) {
   };
 }
 
-function initialise({ home, data, secret, pg }) {
-  if (existsSync(join(data, 'PG_VERSION'))) return;
+function makeFolder(folder) {
   try {
-    mkdirSync(home, { recursive: true, mode: 0o755 });
-    giveToServerAccount(home);
-    writeFileSync(secret, randomBytes(18).toString('hex'), { mode: 0o600 });
-    giveToServerAccount(secret);
+    mkdirSync(folder, { recursive: true, mode: 0o755 });
   } catch (error) {
     throw new Error(
-      `The data folder ${home} cannot be written (${error.code}). Give this user the right, or set DATA_DIR to another folder.`,
+      `The data folder ${folder} cannot be written (${error.code}). Give this user the right, or set DATA_DIR to another folder.`,
     );
   }
+}
+
+function initialise({ home, data, secret, pg }) {
+  if (existsSync(join(data, 'PG_VERSION'))) return;
+  makeFolder(home);
+  giveToServerAccount(home);
+  // Made beside its place and moved there when it is whole: a start that was interrupted is simply begun anew.
+  const unfinished = `${data}.unfinished`;
+  rmSync(unfinished, { recursive: true, force: true });
+  writeFileSync(secret, randomBytes(18).toString('hex'), { mode: 0o600 });
+  giveToServerAccount(secret);
   const result = pg('initdb', [
-    ...['-D', data, '-U', superuser, '-A', 'scram-sha-256', '--pwfile', secret],
+    ...['-D', unfinished, '-U', superuser, '-A', 'scram-sha-256', '--pwfile', secret],
     ...['-E', 'UTF8', '--locale=C.UTF-8', '--no-instructions'],
   ]);
   if (result.status !== 0) throw new Error(`PostgreSQL could not make its data folder ${data}:\n${result.stderr}`);
+  renameSync(unfinished, data);
 }
 
 function startServer({ home, data, port, durable, pg }) {
@@ -109,11 +118,14 @@ function startServer({ home, data, port, durable, pg }) {
   const settings = [`-p ${port}`, '-c listen_addresses=127.0.0.1', "-c unix_socket_directories=''", '-c max_connections=200'];
   if (!durable) settings.push('-c fsync=off', '-c synchronous_commit=off', '-c full_page_writes=off');
   const log = join(home, 'server.log');
+  const said = existsSync(log) ? readFileSync(log).length : 0;
   const result = pg('pg_ctl', ['-D', data, '-l', log, '-w', '-t', '60', '-o', settings.join(' '), 'start'], { stdio: 'ignore' });
   if (result.status === 0) return;
-  const tail = existsSync(log) ? readFileSync(log, 'utf8').slice(-2000) : '';
+  const tail = existsSync(log) ? readFileSync(log).subarray(said).toString('utf8').slice(-2000) : '';
   if (/Address already in use/.test(tail)) {
-    throw new Error(`Port ${port} of 127.0.0.1 is in use, so PostgreSQL cannot start there. Set PG_PORT to a free port.`);
+    throw new Error(
+      `Port ${port} of 127.0.0.1 is in use, so PostgreSQL cannot start there. Set PG_PORT (for the tests TEST_PG_PORT) to a free port.`,
+    );
   }
   throw new Error(`PostgreSQL did not start:\n${tail}`);
 }
