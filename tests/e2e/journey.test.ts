@@ -1,9 +1,8 @@
 import { randomUUID } from 'node:crypto';
-import { readFileSync } from 'node:fs';
-import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { openBrowser, type Screen, screens, Visitor } from '../support/browser.ts';
 import { newFolder, type RunningApp, removeFolder, startApp } from '../support/running-app.ts';
+import { addLike, answerVisit, download, enterPeaks, fillCable, fillCampaign, frequencies, openCable, submit } from './journey-steps.ts';
 
 /** Two ways to hold it: a phone and a wide screen, each with a structure of its own, against one real server. */
 const folder = newFolder();
@@ -72,14 +71,8 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
     const engineer = await Visitor.arrive(browser, app, screen, 'engineer');
     const { page, firm } = engineer;
     await engineer.open(`${firm}/site/new?structure=${structureId}`);
-    await page.getByLabel('Name').fill('First survey');
-    await page.getByLabel('First day').fill('2026-12-01');
-    await page.getByLabel('Stage of the structure').fill('In service, permanent load');
-    await page.getByLabel('Reference that tensions are compared with').selectOption('design');
-    await page.getByRole('radio', { name: /Agreed with the client/ }).check();
-    await page.getByLabel('Not more below the reference than').fill('10');
-    await page.getByLabel('Not more above the reference than').fill('10');
-    await page.getByRole('button', { name: /^Open the campaign|^Create/ }).click();
+    await fillCampaign(page);
+    await page.getByRole('button', { name: 'Open the campaign' }).click();
     await engineer.sees('First survey');
     campaign = new URL(page.url()).pathname;
     for (const [index, cable] of ['A-01', 'A-02'].entries()) {
@@ -119,6 +112,7 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
     for (const name of ['Scope', 'Conditions', 'Deviations', 'Conclusion'])
       await page.getByLabel(name, { exact: true }).fill(`${name} of the survey.`);
     await page.getByRole('button', { name: 'Save the texts' }).click();
+    await page.getByText('Saved.', { exact: true }).waitFor();
     await submit(page);
     await page.getByText('in check', { exact: true }).first().waitFor();
     await engineer.sees(/, revision A$/);
@@ -185,10 +179,10 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
     }
     await page.getByRole('button', { name: 'Approve and sign' }).click();
     await page.getByRole('checkbox', { name: 'This is what I sign' }).check();
-    await page.getByLabel('Your password').fill('not the password');
+    await page.getByLabel('Your password', { exact: true }).fill('not the password');
     await page.getByRole('button', { name: 'Sign: checked and approved' }).click();
     await page.getByText('This is not your password.', { exact: false }).first().waitFor();
-    await page.getByLabel('Your password').fill(passwordOf('checker'));
+    await page.getByLabel('Your password', { exact: true }).fill(checker.password);
     await page.getByRole('button', { name: 'Sign: checked and approved' }).click();
     await page.getByRole('heading', { name: 'Revision A, approved' }).waitFor();
     await checker.leave();
@@ -198,11 +192,10 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
     const engineer = await Visitor.arrive(browser, app, screen, 'engineer');
     const { page, firm } = engineer;
     await engineer.open(`${firm}/reports/${revision}`);
-    await page
-      .getByRole('button', { name: /^Issue to/ })
-      .and(page.locator(':not([aria-disabled])'))
-      .click({ timeout: 60_000 });
-    await page.getByLabel('Your password').fill(passwordOf('engineer'));
+    await page.getByRole('button', { name: /^Issue to/ }).waitFor();
+    await page.getByText('The PDF is being rendered').waitFor({ state: 'detached', timeout: 60_000 });
+    await page.getByRole('button', { name: /^Issue to/ }).click();
+    await page.getByLabel('Your password', { exact: true }).fill(engineer.password);
     await page.getByRole('button', { name: 'Sign the PDF and issue it' }).click();
     await page.getByText('issued', { exact: true }).first().waitFor();
     await engineer.sees(/, revision A$/);
@@ -255,74 +248,3 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
     await anyone.leave();
   });
 });
-
-/** A stay of 40 m in 12 strands near 1 000 kN, as f/n rises with n by bending. */
-const frequencies = [2.815, 5.635, 8.46, 11.295, 14.145, 17.01, 19.9];
-
-function passwordOf(role: 'engineer' | 'checker'): string {
-  return app.accounts.find((account) => account.role === role)!.password;
-}
-
-async function fillCable(page: Page, reference: string): Promise<void> {
-  await page.getByLabel('Our reference').fill(reference);
-  await page.getByLabel('Kind', { exact: true }).selectOption('stay');
-  await page.getByLabel('Strand from the catalogue').selectOption('y1860s7-15.7-sheathed');
-  await page.getByLabel('Number of strands').fill('12');
-  await page.getByLabel('Where these come from').selectOption('supplier');
-  await page.getByLabel('Chord between working points').fill('40,3');
-  await page.getByLabel('Tolerance of the chord, ±').fill('20');
-  await page.getByLabel('Where the chord comes from').selectOption('as-built');
-  for (const side of ['Lower', 'Upper']) await page.getByLabel(`${side} deduction`).fill('1');
-  for (const tolerance of await page.getByLabel('Its tolerance, ±').all()) await tolerance.fill('20');
-  await page.getByLabel('Where the deductions come from').selectOption('design');
-  await page.getByLabel('Inclination from the horizontal').fill('35');
-  for (const end of ['Lower end', 'Upper end']) await page.getByLabel(`${end}, as the drawings say`).selectOption('socket');
-  for (const group of await page.getByRole('radio', { name: 'None' }).all()) await group.check();
-  await page.getByLabel('Design tension, mean chord').fill('860');
-  await page.getByLabel('Construction stage').fill('In service, permanent load');
-}
-
-/** A second cable with the same section, by the same interface as the form. */
-async function addLike(engineer: Visitor, structureId: string, reference: string): Promise<void> {
-  const path = `/api/v1/firms${engineer.firm}/structures/${structureId}/cables`;
-  const { items } = (await engineer.page.evaluate(async (address) => (await fetch(address)).json(), path)) as {
-    items: Record<string, unknown>[];
-  };
-  const { id: _id, structureId: _structure, section: _section, references: _references, spans, ...fields } = items[0]!;
-  const copied = (spans as Record<string, unknown>[]).map(({ cableId: _cable, position: _position, ...span }) => ({
-    ...span,
-    id: randomUUID(),
-  }));
-  await engineer.send('POST', `/structures/${structureId}/cables`, { ...fields, id: randomUUID(), reference, position: 1, spans: copied });
-}
-
-async function enterPeaks(page: Page, values: readonly number[]): Promise<void> {
-  for (const [index, value] of values.slice(0, 6).entries()) {
-    await page.getByLabel(`Frequency of mode ${index + 1}`).fill(value.toFixed(3));
-  }
-}
-
-async function answerVisit(page: Page): Promise<void> {
-  for (const label of [/^Damper at the lower end/, /^Damper at the upper end/, 'Bushing'])
-    await page.getByLabel(label).selectOption('none');
-  await page.getByRole('radio', { name: 'no', exact: true }).check();
-  await page.getByLabel('What made it vibrate').selectOption('ambient');
-}
-
-async function submit(page: Page): Promise<void> {
-  await page.getByRole('checkbox', { name: 'This is what I sign' }).check();
-  await page.getByRole('button', { name: 'Submit revision A for checking' }).and(page.locator(':not([aria-disabled])')).click();
-}
-
-async function openCable(page: Page, reference: string): Promise<void> {
-  await page
-    .getByRole('link', { name: new RegExp(`^${reference}`) })
-    .first()
-    .click();
-  await page.getByRole('heading', { name: `Cable ${reference}` }).waitFor();
-}
-
-async function download(page: Page, link: string | RegExp): Promise<Buffer> {
-  const [started] = await Promise.all([page.waitForEvent('download'), page.getByRole('link', { name: link }).click()]);
-  return readFileSync(await started.path());
-}

@@ -2,7 +2,7 @@ import { mkdirSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import AxeBuilder from '@axe-core/playwright';
 import { type Browser, type BrowserContext, chromium, type Page } from 'playwright-core';
-import { expect } from 'vitest';
+import { expect, onTestFailed } from 'vitest';
 import type { DemonstrationAccount, RunningApp } from './running-app.ts';
 
 const pictures = fileURLToPath(new URL('../../.data/pictures', import.meta.url));
@@ -33,6 +33,8 @@ export class Visitor {
     readonly screen: Screen,
     /** The address of the firm. */
     readonly firm: string,
+    /** For signatures, which ask for it again. */
+    readonly password: string,
   ) {}
 
   static async arrive(browser: Browser, app: RunningApp, screen: Screen, role: DemonstrationAccount['role'] | null): Promise<Visitor> {
@@ -44,17 +46,19 @@ export class Visitor {
     const page = await context.newPage();
     page.setDefaultTimeout(15_000);
     let firm = '';
+    const password = app.accounts.find((account) => account.role === role)?.password ?? '';
     if (role !== null) {
       const account = app.accounts.find((candidate) => candidate.role === role)!;
       await page.goto(`${app.address}/sign-in`);
       await page.getByLabel('E-mail address').fill(account.email);
-      await page.getByLabel('Password', { exact: true }).fill(account.password);
+      await page.getByLabel('Password', { exact: true }).fill(password);
       await page.getByRole('button', { name: 'Sign in' }).click();
       await page.waitForURL(/\/[0-9a-f-]{36}\//);
       firm = `/${new URL(page.url()).pathname.split('/')[1]}`;
     }
-    const visitor = new Visitor(context, page, app, screen, firm);
+    const visitor = new Visitor(context, page, app, screen, firm, password);
     page.on('pageerror', (error) => visitor.faults.push(error.message));
+    onTestFailed(({ task }) => visitor.keepPicture(`failed ${task.name}`));
     return visitor;
   }
 
@@ -67,13 +71,18 @@ export class Visitor {
     const heading = this.page.getByRole('heading', { level: 1, name: title });
     await heading.waitFor();
     await this.page.getByText('Loading').waitFor({ state: 'detached' });
-    const name = `${String(title).replace(/\W+/g, '-')}-${this.screen.name}.png`.replace(/^-/, '');
-    mkdirSync(pictures, { recursive: true });
-    await this.page.screenshot({ path: `${pictures}/${name}`, fullPage: true });
+    await this.keepPicture(String(title));
     const { violations } = await new AxeBuilder({ page: this.page }).analyze();
     expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`)).toEqual([]);
     const sideways = await this.page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
     expect(sideways, 'the page scrolls sideways').toBeLessThanOrEqual(0);
+  }
+
+  /** A picture of the whole page, to be looked at. */
+  async keepPicture(name: string): Promise<void> {
+    mkdirSync(pictures, { recursive: true });
+    const file = `${name.replace(/\W+/g, '-').replace(/^-/, '')}-${this.screen.name}.png`;
+    await this.page.screenshot({ path: `${pictures}/${file}`, fullPage: true });
   }
 
   /** A request from the page itself, with its cookie and origin. */
