@@ -82,3 +82,29 @@ export async function fillCampaign(page: Page): Promise<void> {
   await page.getByLabel('Not more below the reference than').fill('10');
   await page.getByLabel('Not more above the reference than').fill('10');
 }
+
+/** Saves the entry and waits until the app has gone on to where work waits. */
+export async function saveEntry(page: Page): Promise<void> {
+  const here = page.url();
+  await page.getByRole('button', { name: /^Save and go to/ }).click();
+  await page.waitForURL((url) => url.href !== here);
+}
+
+/** A structure without cables, ordered by the demonstration's client. */
+export async function addStructure(engineer: Visitor, id: string, name: string): Promise<void> {
+  const { items } = (await engineer.page.evaluate(async (path) => (await fetch(path)).json(), `/api/v1/firms${engineer.firm}/clients`)) as {
+    items: { id: string }[];
+  };
+  await engineer.send('POST', '/structures', {
+    id,
+    name,
+    reference: '',
+    kind: 'cable-stayed',
+    ownerName: '',
+    clientId: items[0]!.id,
+    place: 'Orrinvale',
+    timeZone: 'Europe/London',
+    elevation: null,
+    notes: '',
+  });
+}

@@ -2,7 +2,19 @@ import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { openBrowser, type Screen, screens, Visitor } from '../support/browser.ts';
 import { newFolder, type RunningApp, removeFolder, startApp } from '../support/running-app.ts';
-import { addLike, answerVisit, download, enterPeaks, fillCable, fillCampaign, frequencies, openCable, submit } from './journey-steps.ts';
+import {
+  addLike,
+  addStructure,
+  answerVisit,
+  download,
+  enterPeaks,
+  fillCable,
+  fillCampaign,
+  frequencies,
+  openCable,
+  saveEntry,
+  submit,
+} from './journey-steps.ts';
 
 /** Two ways to hold it: a phone and a wide screen, each with a structure of its own, against one real server. */
 const folder = newFolder();
@@ -31,21 +43,7 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
     const engineer = await Visitor.arrive(browser, app, screen, 'engineer');
     const { page, firm } = engineer;
     await engineer.sees('Desk');
-    const { items } = (await engineer.page.evaluate(async (path) => (await fetch(path)).json(), `/api/v1/firms${firm}/clients`)) as {
-      items: { id: string }[];
-    };
-    await engineer.send('POST', '/structures', {
-      id: structureId,
-      name: bridge,
-      reference: '',
-      kind: 'cable-stayed',
-      ownerName: '',
-      clientId: items[0]!.id,
-      place: 'Orrinvale',
-      timeZone: 'Europe/London',
-      elevation: null,
-      notes: '',
-    });
+    await addStructure(engineer, structureId, bridge);
     await engineer.open(`${firm}/structures`);
     await engineer.sees('Structures');
     await page.getByRole('link', { name: bridge }).first().click();
@@ -89,7 +87,7 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
       // Computed on the device while typing.
       await page.getByText(/±/).first().waitFor();
       await engineer.sees(`Cable ${cable}`);
-      await page.getByRole('button', { name: /^Save and go to/ }).click();
+      await saveEntry(page);
       await engineer.open(campaign);
       await page.getByRole('heading', { name: 'First survey' }).waitFor();
     }
@@ -155,7 +153,7 @@ describe.each(screens)('from the cable to the verified PDF, on a $name screen', 
     await page.getByRole('button', { name: /^Mode 6: number/ }).click();
     await page.getByLabel('Mode number').fill('7');
     await page.getByLabel('Frequency of mode 7').fill(String(frequencies[6]!.toFixed(3)));
-    await page.getByRole('button', { name: /^Save and go to/ }).click();
+    await saveEntry(page);
     await engineer.open(campaign);
     await page.getByRole('button', { name: 'Save estimates' }).click();
     await page.getByText('Every estimate is saved.').waitFor();

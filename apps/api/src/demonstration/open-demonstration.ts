@@ -20,7 +20,7 @@ export type DemonstrationAccount = z.infer<typeof account>;
 export async function openDemonstration(environment: Record<string, string>, dataFolder: string, ownerUrl: string) {
   const mailServer = await startFakeMailServer(dataFolder, () => new Date());
   // Valid from before the demonstration's past, so that its reports of last year are signed within it.
-  await keepDemonstrationIdentity(environment['SIGNING_DIR']!, { name: 'Larkmoor Structural', now: new Date('2025-01-01T00:00:00Z') });
+  await keepDemonstrationIdentity(environment.SIGNING_DIR!, { name: 'Larkmoor Structural', now: new Date('2025-01-01T00:00:00Z') });
   const file = join(dataFolder, 'demonstration.json');
   if (!existsSync(file)) {
     const env = readEnv({ ...environment, LOG_LEVEL: 'silent', SMTP_URL: mailServer.url });
