@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { setTimeout } from 'node:timers/promises';
 import { schema } from '@strandnote/db';
 import { afterAll, beforeAll, beforeEach, expect, test } from 'vitest';
 import { and, eq } from '../support/drizzle.ts';
@@ -69,28 +70,36 @@ test('begins as an empty draft, and in no other state', async () => {
   await refused(insert({}), uniqueViolation);
 });
 
-test('lets one of two approvals at the same moment through', async () => {
+/** Waits until some transaction waits for a lock, a second at most: without the lock there would be nothing to wait for. */
+async function somebodyWaits(): Promise<void> {
+  for (let look = 0; look < 50; look++) {
+    const { rows } = await database.superuser.query(
+      'select 1 from pg_locks l join pg_stat_activity a using (pid) where not l.granted and a.datname = current_database()',
+    );
+    if (rows.length > 0) return;
+    await setTimeout(20);
+  }
+}
+
+test('lets nobody sign for an approval while another is being given', async () => {
   const submitted = await life.submit();
-  const second = { ...life.firm.checker, userId: randomUUID(), name: 'Second checker' };
-  await life.as(life.firm.checker, (tx) => tick(tx, life.firm.checker, submitted.submissionId, life.bridge.cableId));
-  const approving = [life.firm.checker, second].map((checker) =>
-    life.as(checker, (tx) =>
-      sign(tx, checker, { revisionId: life.draft.revisionId, ...submitted, meaning: 'checked and approved' }).then(() =>
-        tx
-          .update(revisions)
-          .set({ state: 'approved', approvedSubmissionId: submitted.submissionId })
-          .where(and(eq(revisions.id, life.draft.revisionId), eq(revisions.state, 'in check')))
-          .returning({ id: revisions.id }),
-      ),
-    ),
-  );
-  const outcomes = await Promise.allSettled(approving);
-  expect(outcomes.map(({ status }) => status).sort()).toEqual(['fulfilled', 'rejected']);
-  const { rows } = await database.superuser.query(
-    "select count(*)::int from signatures where revision_id = $1 and meaning = 'checked and approved'",
-    [life.draft.revisionId],
-  );
-  expect(rows[0].count).toBe(1);
+  const { checker } = life.firm;
+  const second = { ...checker, userId: randomUUID(), name: 'Second checker' };
+  const signed = { revisionId: life.draft.revisionId, ...submitted, meaning: 'checked and approved' } as const;
+  const approval = { state: 'approved', approvedSubmissionId: submitted.submissionId } as const;
+  let late: Promise<unknown> = Promise.resolve();
+  await life.as(checker, async (tx) => {
+    await tick(tx, checker, submitted.submissionId, life.bridge.cableId);
+    await sign(tx, checker, signed);
+    late = refused(
+      life.as(second, (other) => sign(other, second, signed)),
+      'SN006',
+      /while the revision is approved/,
+    );
+    await somebodyWaits();
+    await tx.update(revisions).set(approval).where(eq(revisions.id, life.draft.revisionId));
+  });
+  await late;
 });
 
 test('lets one of two conditional updates at the same moment find its row', async () => {

@@ -31,7 +31,7 @@ export function Definitions({ items }: { items: Definition[] }) {
           <dt style={{ flex: '1 1 120px' }}>
             <Text tone="muted">{item.term}</Text>
           </dt>
-          <dd style={{ margin: 0, flex: '1 1 140px', display: 'flex', flexDirection: 'column', alignItems: 'flex-end' }}>
+          <dd style={{ margin: 0, flex: '1 1 140px', minWidth: 0, display: 'flex', flexDirection: 'column', alignItems: 'flex-end' }}>
             <DefinitionValue item={item} />
           </dd>
         </div>
