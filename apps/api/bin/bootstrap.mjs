@@ -18,7 +18,19 @@ Object.assign(cleanEnv, { EXPO_NO_TELEMETRY: '1', EXPO_OFFLINE: '1', BETTER_AUTH
 export function run(command, args, options = {}) {
   const result = spawnSync(command, args, { cwd: root, stdio: 'inherit', env: cleanEnv, ...options });
   if (result.error) throw result.error;
-  if (result.status !== 0) throw new Error(`"${command} ${args.join(' ')}" ended with ${result.status ?? result.signal}.`);
+  if (result.status === 0) return;
+  const error = new Error(`"${command} ${args.join(' ')}" ended with ${result.status ?? result.signal}.`);
+  throw Object.assign(error, { output: result.output?.filter(Boolean).join('\n') });
+}
+
+/** Says in a sentence what takes a while; what the program prints is shown only when it fails. */
+export function runQuietly(sentence, command, args, options = {}) {
+  console.log(sentence);
+  try {
+    run(command, args, { encoding: 'utf8', stdio: 'pipe', ...options });
+  } catch (error) {
+    throw new Error(`${error.message}\n${error.output ?? ''}`);
+  }
 }
 
 function ensurePnpm() {

@@ -4,7 +4,7 @@ import { existsSync, mkdirSync, readdirSync, readFileSync, renameSync, rmSync, s
 import { extname, join, relative } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { brotliCompressSync, constants, gzipSync } from 'node:zlib';
-import { cleanEnv, pnpm, root, run } from '../../api/bin/bootstrap.mjs';
+import { cleanEnv, pnpm, root, run, runQuietly } from '../../api/bin/bootstrap.mjs';
 
 const mobile = fileURLToPath(new URL('..', import.meta.url));
 const dist = join(mobile, 'dist');
@@ -23,7 +23,12 @@ export function exportWeb() {
   rmSync(next, { recursive: true, force: true });
   mkdirSync(work, { recursive: true });
   const env = { ...cleanEnv, CI: '1', NODE_ENV: 'production' };
-  run(pnpm, ['exec', 'expo', 'export', '--platform', 'web', '--output-dir', relative(mobile, next)], { cwd: mobile, env });
+  runQuietly(
+    'Exporting the web app, which takes up to a minute.',
+    pnpm,
+    ['exec', 'expo', 'export', '--platform', 'web', '--output-dir', relative(mobile, next)],
+    { cwd: mobile, env },
+  );
   run(process.execPath, [join(mobile, 'bin', 'make-service-worker.mjs'), next]);
   precompress(next);
   rmSync(dist, { recursive: true, force: true });

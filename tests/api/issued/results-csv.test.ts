@@ -47,3 +47,11 @@ test('does not let a text run as a formula, and leaves negative numbers as they 
   expect(rows[1]!.owner_reference).toBe('\'=HYPERLINK("x")');
   expect(rows[0]!.tension_to_reference_minus_1).toBe('-0.25');
 });
+
+test('gives no single tension where only bounds may be given', () => {
+  const copy = structuredClone(content);
+  copy.cables[0]!.spans[0]!.estimate!.output.boundsOnly = 'Above 15 % expanded uncertainty only bounds are given.';
+  const [row] = readCsv(resultsCsv(copy));
+  expect([row!.tension_N, row!.tension_standard_uncertainty_N]).toEqual(['', '']);
+  expect(Number(row!.tension_95_low_N)).toBe(copy.cables[0]!.spans[0]!.estimate!.output.interval95[0]);
+});

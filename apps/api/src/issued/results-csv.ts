@@ -26,8 +26,8 @@ const columns: Record<string, (row: Row) => Cell> = {
   visited_at: ({ span }) => span.measurement?.visitedAt ?? null,
   steel_temperature_degC: ({ span, content }) => span.measurement?.steelTemperature ?? content.campaign.steelTemperature,
   modes_used: ({ span }) => span.measurement && modesUsed(span),
-  tension_N: ({ span }) => span.estimate?.output.tension ?? null,
-  tension_standard_uncertainty_N: ({ span }) => span.estimate?.output.standardUncertainty ?? null,
+  tension_N: ({ span }) => singleValue(span)?.tension ?? null,
+  tension_standard_uncertainty_N: ({ span }) => singleValue(span)?.standardUncertainty ?? null,
   tension_95_low_N: ({ span }) => span.estimate?.output.interval95[0] ?? null,
   tension_95_high_N: ({ span }) => span.estimate?.output.interval95[1] ?? null,
   tension_if_hinged_N: ({ span }) => span.estimate?.output.bracket.hinged ?? null,
@@ -59,6 +59,11 @@ export function resultsCsv(content: ReportContent): string {
   const cells = rows.map((row) => Object.values(columns).map((cell) => cell(row)));
   // A text that begins with = + - or @ would run as a formula in a spreadsheet; numbers are left as they are.
   return `\uFEFF${papaparse.unparse({ fields: Object.keys(columns), data: cells }, { escapeFormulae: true })}\r\n`;
+}
+
+/** The estimate where a single tension may be given; where only bounds may, a table gives no number that somebody could copy. */
+function singleValue({ estimate }: FrozenSpan) {
+  return estimate !== null && estimate.output.boundsOnly === null ? estimate.output : null;
 }
 
 function inputOf(span: FrozenSpan, quantity: FrozenSpan['inputs'][number]['quantity']): number | null {
