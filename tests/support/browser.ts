@@ -23,6 +23,16 @@ export function openBrowser(): Promise<Browser> {
   });
 }
 
+// A person signs in once and comes back with their cookie: sign-ins are limited to ten a minute.
+const sessions = new Map<string, Awaited<ReturnType<BrowserContext['storageState']>>>();
+
+async function signIn(page: Page, { address }: RunningApp, { email, password }: DemonstrationAccount): Promise<void> {
+  await page.goto(`${address}/sign-in`);
+  await page.getByLabel('E-mail address').fill(email);
+  await page.getByLabel('Password', { exact: true }).fill(password);
+  await page.getByRole('button', { name: 'Sign in' }).click();
+}
+
 /** One person at one screen, signed in unless nobody is named. Errors of the page fail the test that caused them. */
 export class Visitor {
   readonly faults: string[] = [];
@@ -38,25 +48,21 @@ export class Visitor {
   ) {}
 
   static async arrive(browser: Browser, app: RunningApp, screen: Screen, role: DemonstrationAccount['role'] | null): Promise<Visitor> {
-    const context = await browser.newContext({
-      viewport: { width: screen.width, height: screen.height },
-      acceptDownloads: true,
-      reducedMotion: 'reduce',
-    });
+    const account = app.accounts.find((candidate) => candidate.role === role);
+    const key = `${app.address} ${role}`;
+    const session = sessions.get(key);
+    const viewport = { width: screen.width, height: screen.height };
+    const context = await browser.newContext({ viewport, reducedMotion: 'reduce', ...(session ? { storageState: session } : {}) });
     const page = await context.newPage();
     page.setDefaultTimeout(15_000);
     let firm = '';
-    const password = app.accounts.find((account) => account.role === role)?.password ?? '';
-    if (role !== null) {
-      const account = app.accounts.find((candidate) => candidate.role === role)!;
-      await page.goto(`${app.address}/sign-in`);
-      await page.getByLabel('E-mail address').fill(account.email);
-      await page.getByLabel('Password', { exact: true }).fill(password);
-      await page.getByRole('button', { name: 'Sign in' }).click();
+    if (account) {
+      await (session ? page.goto(`${app.address}/`) : signIn(page, app, account));
       await page.waitForURL(/\/[0-9a-f-]{36}\//);
+      sessions.set(key, await context.storageState());
       firm = `/${new URL(page.url()).pathname.split('/')[1]}`;
     }
-    const visitor = new Visitor(context, page, app, screen, firm, password);
+    const visitor = new Visitor(context, page, app, screen, firm, account?.password ?? '');
     page.on('pageerror', (error) => visitor.faults.push(error.message));
     onTestFailed(({ task }) => visitor.keepPicture(`failed ${task.name}`));
     return visitor;
