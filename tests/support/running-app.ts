@@ -1,5 +1,5 @@
 import { type ChildProcess, spawn } from 'node:child_process';
-import { mkdtempSync, readFileSync, rmSync } from 'node:fs';
+import { chmodSync, mkdtempSync, readFileSync, rmSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -49,7 +49,9 @@ export async function startApp(folder: string = newFolder()): Promise<RunningApp
 
 /** A data folder that nobody else has; PostgreSQL's account must be able to walk to it. */
 export function newFolder(): string {
-  return mkdtempSync('/var/tmp/strandnote-e2e-');
+  const folder = mkdtempSync('/var/tmp/strandnote-e2e-');
+  chmodSync(folder, 0o755);
+  return folder;
 }
 
 export function removeFolder(folder: string): void {

@@ -11,7 +11,7 @@ import { type Blocker, findBlockers } from './find-blockers.ts';
 import type { LoadedRevision } from './load-revision.ts';
 import { type Source, sourcesOf } from './sources.ts';
 
-const { clients, firms, revisionCables } = schema;
+const { clients, firms, revisionCables, revisions } = schema;
 
 /** The content of a draft as it would be frozen now, with what stands in the way and the rows that it uses. */
 export interface DraftContent {
@@ -42,13 +42,18 @@ export async function draftContent(tx: Tx, { revision, report }: LoadedRevision)
     campaign: surveyed.detail,
     texts: revision.texts,
   });
+  const ofReport = await tx.select({ id: revisions.id }).from(revisions).where(eq(revisions.reportId, report.id));
   const text = canonicalJson(content);
   return {
     content,
     text,
     contentSha256: sha256OfText(text),
     blockers: findBlockers(content, staleEstimates(surveyed)),
-    sources: sourcesOf(content, surveyed, revision.id),
+    sources: sourcesOf(
+      content,
+      surveyed,
+      ofReport.map(({ id }) => id),
+    ),
   };
 }
 

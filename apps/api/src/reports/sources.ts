@@ -11,11 +11,13 @@ export interface Source {
 /**
  * Every row whose values this content uses, each once: whoever entered or changed one of them cannot check it. Peaks count
  * with their measurement; the tension of the last survey counts with its estimate and its measurement.
+ *
+ * @param revisionIds this revision and those before it in the report, whose texts it began with
  */
-export function sourcesOf(content: ReportContent, { detail, rows }: SurveyedCampaign, revisionId: string): Source[] {
+export function sourcesOf(content: ReportContent, { detail, rows }: SurveyedCampaign, revisionIds: string[]): Source[] {
   const spanIds = new Set(content.cables.flatMap(({ spans }) => spans.map(({ id }) => id)));
   const used: Record<Source['entity'], (string | undefined)[]> = {
-    revision: [revisionId],
+    revision: revisionIds,
     campaign: [content.campaign.id],
     'campaign-cable': rows.entries.map(({ place }) => place.id),
     cable: rows.entries.map(({ cable }) => cable.id),
