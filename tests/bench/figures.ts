@@ -50,7 +50,7 @@ async function estimates({ address, accounts }: RunningApp): Promise<string> {
   await page.getByLabel('Password', { exact: true }).fill(engineer.password);
   await page.getByRole('button', { name: 'Sign in' }).click();
   await page.getByRole('link', { name: /Autumn survey/ }).click();
-  await page.getByRole('link', { name: /W-07u/ }).first().click();
+  await page.getByRole('link', { name: /^Cable W-07u/ }).click();
   const field = page.getByLabel('Frequency of mode 3');
   await field.waitFor();
   const typed = await field.inputValue();
