@@ -1,11 +1,13 @@
 import { Redirect } from 'expo-router';
-import { type Membership, useMeQuery } from '../../lib/session.tsx';
+import { hasRole, type Membership, useMeQuery } from '../../lib/session.tsx';
 import type { ThemePreference } from '../../theme/themes.ts';
 import { useTheme } from '../../theme/use-theme.tsx';
 import { Button, Choice, Heading, Loading, Notice, Page, Panel, Problem, Row, Stack, Text } from '../../ui/index.ts';
 import { homeOf } from '../shell/places.ts';
 import { useEditMeMutation, useSignOutEverywhereMutation, useSignOutMutation } from './account.api.ts';
 import { AccountSessions } from './account-sessions.tsx';
+import { FirmLinks } from './firm-links.tsx';
+import { LicenceForm } from './licence-form.tsx';
 
 export function AccountScreen() {
   const me = useMeQuery();
@@ -42,6 +44,7 @@ function FirmPanel({ firm }: { firm: Membership }) {
     <Panel>
       <Heading level={2}>{firm.firmName}</Heading>
       <Text>{[...firm.roles, firm.clientName].filter(Boolean).join(', ')}</Text>
+      {hasRole(firm, 'admin', 'engineer', 'checker') ? <FirmLinks firm={firm} /> : null}
       <Choice
         label="Units"
         row
@@ -53,6 +56,7 @@ function FirmPanel({ firm }: { firm: Membership }) {
         ]}
       />
       {edit.isError ? <Problem error={edit.error} /> : null}
+      {hasRole(firm, 'engineer', 'checker') ? <LicenceForm firm={firm} /> : null}
     </Panel>
   );
 }

@@ -1,0 +1,3 @@
+import { deferredScreen } from '../../../../features/deferred-screen.ts';
+
+export default deferredScreen('clients/clients-screen');
