@@ -4,6 +4,7 @@ import { useFieldArray, useForm } from 'react-hook-form';
 import { showProblem } from '../../lib/form-problems.ts';
 import { useFirm } from '../../lib/session.tsx';
 import { useUnits } from '../../lib/units.tsx';
+import { useFormDraft } from '../../lib/use-form-draft.ts';
 import {
   Button,
   Columns,
@@ -35,7 +36,7 @@ export function CableFormScreen() {
   const structureId = address.structure ?? cable.data?.structureId ?? '';
   const title = address.cable ? 'Edit the cable' : 'Add a cable';
   if (address.cable && cable.isPending) return <Page title={title}>{<Loading />}</Page>;
-  if (cable.isError) return <Page title={title}>{<Problem error={cable.error} onRetry={cable.refetch} />}</Page>;
+  if (cable.isError && !cable.data) return <Page title={title}>{<Problem error={cable.error} onRetry={cable.refetch} />}</Page>;
   return <LoadedForm key={structureId} structureId={structureId} stored={cable.data ?? null} title={title} />;
 }
 
@@ -44,10 +45,12 @@ function LoadedForm({ structureId, stored, title }: { structureId: string; store
   const structure = useStructureQuery(firm.firmId, structureId);
   const sections = useSectionsQuery(firm.firmId, structureId);
   const cables = useCablesQuery(firm.firmId, structureId);
-  if (structure.isPending || sections.isPending || cables.isPending) return <Page title={title}>{<Loading />}</Page>;
-  if (structure.isError || sections.isError || cables.isError) {
+  // Once there, the form stays: a later refetch that fails must not take away what is being typed.
+  if (!structure.data || !sections.data || !cables.data) {
+    const error = structure.error ?? sections.error ?? cables.error;
+    if (!error) return <Page title={title}>{<Loading />}</Page>;
     const retry = () => Promise.all([structure.refetch(), sections.refetch(), cables.refetch()]);
-    return <Page title={title}>{<Problem error={structure.error ?? sections.error ?? cables.error} onRetry={retry} />}</Page>;
+    return <Page title={title}>{<Problem error={error} onRetry={retry} />}</Page>;
   }
   const position = stored?.position ?? Math.max(0, ...cables.data.items.map((cable) => cable.position + 1));
   return (
@@ -76,10 +79,12 @@ function CableForm({ structureId, stored, sections, position }: CableFormProps) 
   const { system } = useUnits();
   const form = useForm<CableValues>({ defaultValues: stored ? cableValues(stored, system) : newCable() });
   const spans = useFieldArray({ control: form.control, name: 'spans' });
+  const forget = useFormDraft(form, stored ? `cable ${stored.id}` : `cable of ${structureId}`);
   const save = useSaveCable(structureId, stored, position);
   const submit = form.handleSubmit(async (values) => {
     try {
       const cableId = await save(values);
+      forget();
       router.replace(`/${firm.firmId}/structures/cables/${cableId}` as '/');
     } catch (error) {
       showProblem(form, error);
