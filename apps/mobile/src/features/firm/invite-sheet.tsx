@@ -3,6 +3,7 @@ import { useForm } from 'react-hook-form';
 import { showProblem } from '../../lib/form-problems.ts';
 import { useFirm } from '../../lib/session.tsx';
 import { Button, Form, FormTextField, Notice, Sheet } from '../../ui/index.ts';
+import { NewClientSheet } from '../clients/client-form.tsx';
 import { useInviteMutation } from './firm.api.ts';
 import { RolesFields, type RoleValues } from './roles-fields.tsx';
 
@@ -19,6 +20,7 @@ export function InviteSheet({ again, onClose }: { again: Values | null; onClose:
   const [id] = useState(() => crypto.randomUUID());
   const { name = '', email = '', roles = [], clientId = null } = again ?? {};
   const form = useForm<Values>({ defaultValues: { name, email, roles, clientId } });
+  const [addingClient, setAddingClient] = useState(false);
   const { control, formState } = form;
   const submit = form.handleSubmit((values) =>
     invite.mutateAsync({ ...values, id, clientId: values.roles.includes('client') ? values.clientId : null }).then(
@@ -27,39 +29,50 @@ export function InviteSheet({ again, onClose }: { again: Values | null; onClose:
     ),
   );
   return (
-    <Sheet
-      title="Invite a person"
-      onClose={onClose}
-      holds={formState.isDirty}
-      actions={
-        <Button kind="primary" onPress={submit} busy={formState.isSubmitting}>
-          Send the invitation
-        </Button>
-      }
-    >
-      <Form onSubmit={submit} label="Invite a person">
-        <FormTextField
-          control={control}
-          name="name"
-          label="Name"
-          hint="As it stands under what the person signs"
-          maxLength={120}
-          check={(text) => (text.trim() === '' ? 'Give the name of the person.' : null)}
+    <>
+      <Sheet
+        title="Invite a person"
+        onClose={onClose}
+        holds={formState.isDirty}
+        actions={
+          <Button kind="primary" onPress={submit} busy={formState.isSubmitting}>
+            Send the invitation
+          </Button>
+        }
+      >
+        <Form onSubmit={submit} label="Invite a person">
+          <FormTextField
+            control={control}
+            name="name"
+            label="Name"
+            hint="As it stands under what the person signs"
+            maxLength={120}
+            check={(text) => (text.trim() === '' ? 'Give the name of the person.' : null)}
+          />
+          <FormTextField
+            control={control}
+            name="email"
+            label="E-mail address"
+            inputMode="email"
+            check={(text) => (text.trim() === '' ? 'Give the address that the invitation goes to.' : null)}
+          />
+          <RolesFields control={control} onAddClient={() => setAddingClient(true)} />
+          {formState.errors.root?.message ? (
+            <Notice kind="problem" alert>
+              {formState.errors.root.message}
+            </Notice>
+          ) : null}
+        </Form>
+      </Sheet>
+      {addingClient ? (
+        <NewClientSheet
+          onCreated={(client) => {
+            form.setValue('clientId', client.id, { shouldDirty: true, shouldValidate: true });
+            setAddingClient(false);
+          }}
+          onClose={() => setAddingClient(false)}
         />
-        <FormTextField
-          control={control}
-          name="email"
-          label="E-mail address"
-          inputMode="email"
-          check={(text) => (text.trim() === '' ? 'Give the address that the invitation goes to.' : null)}
-        />
-        <RolesFields control={control} />
-        {formState.errors.root?.message ? (
-          <Notice kind="problem" alert>
-            {formState.errors.root.message}
-          </Notice>
-        ) : null}
-      </Form>
-    </Sheet>
+      ) : null}
+    </>
   );
 }

@@ -1,10 +1,8 @@
 import type { Role } from '@strandnote/api/contract';
-import { useState } from 'react';
-import { type Control, type FieldPath, useController, useWatch } from 'react-hook-form';
+import { type Control, useController, useWatch } from 'react-hook-form';
 import { View } from 'react-native';
 import { useFirm } from '../../lib/session.tsx';
 import { Button, Checkbox, FormSelect, Problem, Row, Stack, Text } from '../../ui/index.ts';
-import { NewClientSheet } from '../clients/client-form.tsx';
 import { useClientsQuery } from '../clients/clients.api.ts';
 import { roleWords, withRole } from './role-words.ts';
 
@@ -15,8 +13,14 @@ export interface RoleValues {
 
 const roles = Object.entries(roleWords) as [Role, { label: string; hint: string }][];
 
+export interface RolesFieldsProps<Values extends RoleValues> {
+  control: Control<Values>;
+  /** Opens a sheet for a new client beside the sheet of these fields: within it, Escape would close both. */
+  onAddClient: () => void;
+}
+
 /** Roles of a person and, for a client, the organisation; the refusal of the server stands with them. */
-export function RolesFields<Values extends RoleValues>({ control: given }: { control: Control<Values> }) {
+export function RolesFields<Values extends RoleValues>({ control: given, onAddClient }: RolesFieldsProps<Values>) {
   // What is read here is the same in every form that holds roles.
   const control = given as unknown as Control<RoleValues>;
   const { field, fieldState } = useController({
@@ -46,22 +50,19 @@ export function RolesFields<Values extends RoleValues>({ control: given }: { con
           ) : null}
         </Stack>
       </View>
-      {isClient ? <ClientOrganisation control={control} /> : null}
+      {isClient ? <ClientOrganisation control={control} onAddClient={onAddClient} /> : null}
     </>
   );
 }
 
-function ClientOrganisation({ control }: { control: Control<RoleValues> }) {
+function ClientOrganisation({ control, onAddClient }: { control: Control<RoleValues>; onAddClient: () => void }) {
   const firm = useFirm();
   const clients = useClientsQuery(firm.firmId);
-  const name: FieldPath<RoleValues> = 'clientId';
-  const { field } = useController({ control, name });
-  const [adding, setAdding] = useState(false);
   return (
     <Stack gap={2}>
       <FormSelect
         control={control}
-        name={name}
+        name="clientId"
         label="Client organisation"
         options={(clients.data?.items ?? []).map((client) => ({ value: client.id, label: client.name }))}
         placeholder="Choose a client"
@@ -69,19 +70,10 @@ function ClientOrganisation({ control }: { control: Control<RoleValues> }) {
       />
       {clients.isError ? <Problem error={clients.error} onRetry={clients.refetch} /> : null}
       <Row>
-        <Button kind="quiet" onPress={() => setAdding(true)}>
+        <Button kind="quiet" onPress={onAddClient}>
           Add a client
         </Button>
       </Row>
-      {adding ? (
-        <NewClientSheet
-          onCreated={(client) => {
-            field.onChange(client.id);
-            setAdding(false);
-          }}
-          onClose={() => setAdding(false)}
-        />
-      ) : null}
     </Stack>
   );
 }
