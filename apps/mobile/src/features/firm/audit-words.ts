@@ -96,7 +96,7 @@ const unreadable = /^([0-9a-f]{64}|[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12})$/;
 export function detailsText({ details }: Pick<AuditEvent, 'details'>): string {
   const { from, to, ...given } = details;
   if (isRecord(from) && isRecord(to)) {
-    const changes = Object.keys(to).map((key) => `${words(key)}: ${valueText(from[key]) || 'empty'} → ${valueText(to[key]) || 'empty'}`);
+    const changes = Object.keys(to).map((key) => `${words(key)}: ${valueText(from[key]) || 'empty'} to ${valueText(to[key]) || 'empty'}`);
     return changes.join('; ');
   }
   const all = typeof from === 'string' ? { ...given, from } : given;
