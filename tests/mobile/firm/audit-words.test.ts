@@ -25,7 +25,7 @@ test('every act that the server writes down has words', () => {
 
 test('changes are told with old and new values, keys and hashes are left out', () => {
   expect(detailsText({ details: { from: { phone: '', licenceNumber: '12' }, to: { phone: '555', licenceNumber: '13' } } })).toBe(
-    'phone: empty → 555; licence number: 12 → 13',
+    'phone: empty to 555; licence number: 12 to 13',
   );
   expect(detailsText({ details: { reason: 'Span of W-07 is wrong', from: 'in check' } })).toBe(
     'reason: Span of W-07 is wrong; from: in check',
