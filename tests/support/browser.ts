@@ -54,7 +54,7 @@ export class Visitor {
     const viewport = { width: screen.width, height: screen.height };
     const context = await browser.newContext({ viewport, reducedMotion: 'reduce', ...(session ? { storageState: session } : {}) });
     const page = await context.newPage();
-    page.setDefaultTimeout(15_000);
+    page.setDefaultTimeout(30_000);
     let firm = '';
     if (account) {
       await (session ? page.goto(`${app.address}/`) : signIn(page, app, account));
