@@ -15,7 +15,7 @@ import {
   peakValues,
   type Survey,
 } from '../support/fixtures.ts';
-import { addDraft, approve, type Draft, issue, sign, sourcesOf, submit, tick } from '../support/report-fixtures.ts';
+import { addDraft, addRevision, approve, type Draft, issue, sign, sourcesOf, submit, tick } from '../support/report-fixtures.ts';
 import { refused } from './sql-state.ts';
 
 let database: OpenDatabase;
@@ -172,7 +172,7 @@ interface Later {
 }
 
 /** `both` entered the bridge; a first report on it may be issued; a second campaign and its report are the engineer's. */
-async function laterReport(first: 'issued' | 'approved' | 'withdrawn', checker: Actor): Promise<Later> {
+async function laterReport(first: 'issued' | 'approved' | 'superseded' | 'withdrawn', checker: Actor): Promise<Later> {
   const theirs = await addBridge(database.app, both);
   const firstSurvey = await addSurvey(database.app, firm.engineer, theirs);
   const firstDraft = await addDraft(database.app, firm.engineer, firm, theirs, firstSurvey);
@@ -181,6 +181,11 @@ async function laterReport(first: 'issued' | 'approved' | 'withdrawn', checker: 
   if (first !== 'approved') await issue(database.app, firm.engineer, firstDraft, submitted);
   if (first === 'withdrawn') {
     const set = { state: 'withdrawn', withdrawnAt: new Date(), withdrawnReason: 'Wrong.' } as const;
+    await as(firm.engineer, (tx) => tx.update(schema.revisions).set(set).where(eq(schema.revisions.id, firstDraft.revisionId)));
+  }
+  if (first === 'superseded') {
+    const next = await as(firm.engineer, (tx) => addRevision(tx, firm.engineer, { ...firstDraft, letter: 'B' }));
+    const set = { state: 'superseded', supersededBy: next.revisionId, supersededAt: new Date() } as const;
     await as(firm.engineer, (tx) => tx.update(schema.revisions).set(set).where(eq(schema.revisions.id, firstDraft.revisionId)));
   }
   const secondSurvey = await addSurvey(database.app, firm.engineer, theirs, 2);
@@ -208,6 +213,22 @@ test('no longer counts a value that another person has checked in an issued revi
 test('still counts it while that revision is only approved, or when it was withdrawn', async () => {
   expect(await mayTick(both, await laterReport('approved', firm.checker))).toBe(false);
   expect(await mayTick(both, await laterReport('withdrawn', firm.checker))).toBe(false);
+});
+
+test('goes on not counting it when that revision was superseded since', async () => {
+  const later = await laterReport('superseded', firm.checker);
+  expect(await mayTick(both, later)).toBe(true);
+});
+
+test('still counts it when the checker of that revision was the same person, who could not have checked it by the rules', async () => {
+  const later = await laterReport('issued', firm.checker);
+  await database.superuser.query("set session_replication_role = 'replica'");
+  await database.superuser.query("update signatures set user_id = $1 where firm_id = $2 and meaning = 'checked and approved'", [
+    both.userId,
+    firm.firmId,
+  ]);
+  await database.superuser.query("set session_replication_role = 'origin'");
+  expect(await mayTick(both, later)).toBe(false);
 });
 
 test('counts it again once it was changed after that revision was frozen', async () => {

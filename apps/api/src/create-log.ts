@@ -25,9 +25,9 @@ export function describeRequest(request: IncomingMessage & { id?: unknown; origi
   };
 }
 
-/** Invitations travel in the path, the token of a new password in the query. */
+/** Invitations travel in the path, the token of a new password in the query. Express serves addresses in capitals too. */
 function withoutSecrets(address: string): string {
-  return address.replace(/[?#].*$/, '').replace(/(\/(?:invitations?|reset-password)\/)[^/]+/, '$1…');
+  return address.replace(/[?#].*$/, '').replace(/(\/(?:invitations?|reset-password)\/)[^/]+/i, '$1…');
 }
 
 /** An error without the values of its query: those may be a password's hash or a person's address. */
