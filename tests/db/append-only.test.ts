@@ -41,9 +41,11 @@ test.each(Object.entries(appendOnly))('lets the application neither change nor d
 test.each(Object.entries(appendOnly))('stops even an operator with every right by a trigger on %s', async (table, column) => {
   const { rows } = await database.superuser.query(`select count(*) from ${table}`);
   expect(Number(rows[0].count)).toBeGreaterThan(0);
-  await refused(database.superuser.query(`update ${table} set ${column} = ${column}`), 'SN004');
-  await refused(database.superuser.query(`delete from ${table}`), 'SN004');
-  await refused(database.superuser.query(`truncate ${table} cascade`), 'SN004');
+  // By its own trigger: truncating also asks those of the tables that refer to it.
+  const ownTrigger = new RegExp(`^Rows of ${table} are never changed`);
+  await refused(database.superuser.query(`update ${table} set ${column} = ${column}`), 'SN004', ownTrigger);
+  await refused(database.superuser.query(`delete from ${table}`), 'SN004', ownTrigger);
+  await refused(database.superuser.query(`truncate ${table} cascade`), 'SN004', ownTrigger);
 });
 
 test('lets the application write neither contributions nor heads of the audit chain by hand', async () => {

@@ -99,6 +99,19 @@ test('goes on showing a revision that was superseded or withdrawn, and never a d
   expect(draft.revisionId).not.toBe(second.revisionId);
 });
 
+test('goes by the state too: what was addressed to them before its issue stays hidden', async () => {
+  const { superuser } = database;
+  const address = async (clientId: string | null) => {
+    await superuser.query("set session_replication_role = 'replica'");
+    await superuser.query('update revisions set addressed_client_id = $1 where id = $2', [clientId, draft.revisionId]);
+    await superuser.query("set session_replication_role = 'origin'");
+  };
+  const before = await visibleTo(firm.client);
+  await address(firm.clientId);
+  expect(await visibleTo(firm.client)).toEqual(before);
+  await address(null);
+});
+
 test('lets a client write an event in their own name, and neither read the trail nor write in another name', async () => {
   const event = (actorUserId: string) => ({
     firmId: firm.firmId,
