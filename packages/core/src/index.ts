@@ -26,6 +26,15 @@ export {
 } from './cable/surveyed-span.ts';
 // Decision
 export {
+  type AgreedBasis,
+  type AgreedDecision,
+  chooseReference,
+  decideAsAgreed,
+  type HungCable,
+  referenceAtMeanChord,
+  type StatedReference,
+} from './decision/agreed-reference.ts';
+export {
   canBeProven,
   type Decision,
   type DecisionQuestion,

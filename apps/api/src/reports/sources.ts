@@ -1,6 +1,6 @@
+import { chooseReference } from '@strandnote/core';
 import type { ReportContent } from '@strandnote/core/report-content';
 import type { SurveyedCampaign } from '../campaigns/load-campaign-detail.ts';
-import { chooseReference } from './freeze-reference.ts';
 
 /** A row whose values a submission uses. The names are those under which the database notes who contributed to what. */
 export interface Source {
@@ -23,7 +23,7 @@ export function sourcesOf(content: ReportContent, { detail, rows }: SurveyedCamp
     cable: rows.entries.map(({ cable }) => cable.id),
     section: rows.entries.map(({ section }) => section.id),
     span: [...spanIds],
-    'reference-tension': detail.cables.map(({ cable }) => chooseReference(cable, detail)?.id),
+    'reference-tension': detail.cables.map(({ cable }) => chooseReference(cable.references, detail)?.id),
     measurement: [
       ...content.cables.flatMap(({ spans }) => spans.map(({ measurement }) => measurement?.id)),
       ...rows.lastSurveys.filter(({ spanId }) => spanIds.has(spanId)).map(({ measurementId }) => measurementId),

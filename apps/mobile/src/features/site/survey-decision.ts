@@ -1,5 +1,5 @@
 import type { Cable, Campaign, ReferenceTension } from '@strandnote/api/contract';
-import { type DecisionQuestion, decide, massPerLength, tensionAt } from '@strandnote/core';
+import { chooseReference, type DecisionQuestion, decideAsAgreed, referenceAtMeanChord } from '@strandnote/core';
 import type { Zone } from '@strandnote/core/report-content';
 
 type Agreed = Pick<Campaign, 'basis' | 'stage'>;
@@ -16,42 +16,21 @@ export interface SurveyDecision {
   toReference: number | null;
 }
 
-/**
- * The reference that a cable is compared with, by the rule of the report: of the kind agreed, not retired, for the campaign's
- * stage where there is one, the latest of those; brought to the mean chord.
- */
-export function agreedReference(cable: Cable, { basis, stage }: Agreed): (ReferenceTension & { meanChordValue: number }) | null {
-  const candidates = cable.references.filter(({ kind, retiredAt }) => kind === basis.referenceKind && retiredAt === null);
-  const atStage = candidates.filter((candidate) => sameStage(candidate.stage, stage));
-  const ranked = (atStage.length > 0 ? atStage : candidates).toSorted(
-    (a, b) => (b.dated ?? '').localeCompare(a.dated ?? '') || a.id.localeCompare(b.id),
-  );
-  const chosen = ranked[0];
-  if (!chosen) return null;
-  const hung = { massPerLength: massPerLength(cable.section).value, rise: riseOf(cable) };
-  return { ...chosen, meanChordValue: tensionAt(chosen.value, chosen.place, 'mean-chord', hung) };
+/** The reference that a cable is compared with, brought to the mean chord. */
+export function agreedReference(cable: Cable, agreed: Agreed): (ReferenceTension & { meanChordValue: number }) | null {
+  const chosen = chooseReference(cable.references, agreed);
+  return chosen && { ...chosen, meanChordValue: referenceAtMeanChord(chosen, cable) };
 }
 
 /** The zone of an estimate under the basis that was agreed before the survey. */
 export function decideSpan(cable: Cable, campaign: Agreed, estimate: DecisionQuestion['estimate']): SurveyDecision {
-  const { basis, stage } = campaign;
   const reference = agreedReference(cable, campaign);
-  const limit = (fraction: number | null) => (fraction === null || reference === null ? null : fraction * reference.meanChordValue);
-  const limits = { lowerLimit: limit(basis.lowerLimit), upperLimit: limit(basis.upperLimit) };
-  const otherStage =
-    reference === null || sameStage(reference.stage, stage)
-      ? null
-      : `The reference is for the stage “${reference.stage}”, the survey for “${stage}”.`;
-  const { zone, reason, toReference } = decide({
-    ...limits,
-    estimate,
-    reference: reference?.meanChordValue ?? null,
-    notComparable: otherStage,
-  });
+  const { zone, reason, lowerLimit, upperLimit, toReference } = decideAsAgreed(estimate, reference, campaign);
   return {
     zone,
-    reason: zone === 'no-limit-agreed' ? (whyNoLimit(basis.referenceKind, reference) ?? reason) : reason,
-    ...(otherStage === null ? limits : { lowerLimit: null, upperLimit: null }),
+    reason,
+    lowerLimit,
+    upperLimit,
     reference: reference?.meanChordValue ?? null,
     referenceKind: reference?.kind ?? null,
     toReference,
@@ -72,19 +51,4 @@ export function agreedInWords({ basis }: Agreed, words: Record<ReferenceTension[
 
 function percent(share: number): string {
   return String(Number((100 * share).toPrecision(3)));
-}
-
-function whyNoLimit(kind: string | null, reference: unknown): string | null {
-  if (kind === null) return 'No reference was agreed before the survey.';
-  return reference === null ? 'The cable has no reference tension of the kind that was agreed.' : null;
-}
-
-/** Stages are typed by hand: capitals and spaces around do not make another stage. */
-function sameStage(a: string, b: string): boolean {
-  return a.trim().toLowerCase() === b.trim().toLowerCase();
-}
-
-function riseOf(cable: Cable): number {
-  if (cable.lowerAnchor !== null && cable.upperAnchor !== null) return Math.max(0, cable.upperAnchor.z - cable.lowerAnchor.z);
-  return cable.spans.reduce((rise, span) => rise + span.chordLength * Math.sin(span.inclination), 0);
 }
