@@ -7,13 +7,13 @@ import { estimateMeasurement } from '../../../apps/mobile/src/features/site/live
 import { numberingFindings } from '../../../apps/mobile/src/features/site/numbering-audit.ts';
 import { deafnessOf } from '../../../apps/mobile/src/features/site/sensor-hearing.ts';
 import type { ShowQuantity } from '../../../apps/mobile/src/features/site/show-quantity.ts';
-import { displayUnit, formatNumber, fromSi } from '../../../apps/mobile/src/lib/display-units.ts';
 import { estimateTension } from '../../../packages/core/src/index.ts';
+import { formatNumber, fromSi, unitOf } from '../../../packages/core/src/units/index.ts';
 import { cableNamed, frequencies, peaksAt, visitTo } from './surveyed-cable.ts';
 
 const cable = cableNamed('W-07u');
 const span = cable.spans[0]!;
-const show: ShowQuantity = (si, kind) => `${formatNumber(fromSi(si ?? 0, displayUnit(kind, 'si')), 1)} ${displayUnit(kind, 'si').symbol}`;
+const show: ShowQuantity = (si, kind) => `${formatNumber(fromSi(si ?? 0, kind, 'si'), 1)} ${unitOf(kind, 'si').symbol}`;
 const findings = (over: Parameters<typeof visitTo>[1], changed = span) =>
   findingsOf(draftOf(visitTo(span.id, over), { system: 'si', timeZone: 'UTC' }), {
     section: cable.section,

@@ -1,5 +1,5 @@
 import type { UnitSystem } from '@strandnote/api/contract';
-import { displayUnit, formatNumber, fromSi, type QuantityKind, toSi } from './display-units.ts';
+import { formatNumber, fromSi, type Quantity, toSi, unitOf } from '@strandnote/core/units';
 import { readNumber } from './read-number.ts';
 
 /** What stands in a field: the text exactly as it was typed, and the SI value that it means, or null. */
@@ -11,7 +11,7 @@ export interface QuantityEntry {
 export interface QuantityRules {
   /** As a sentence begins: "The chord". */
   name: string;
-  kind: QuantityKind;
+  kind: Quantity;
   required?: boolean;
   /** In SI: more than; at least; at most. */
   above?: number;
@@ -21,15 +21,15 @@ export interface QuantityRules {
 
 export const emptyEntry: QuantityEntry = { text: '', si: null };
 
-export function readEntry(text: string, kind: QuantityKind, system: UnitSystem): QuantityEntry {
+export function readEntry(text: string, kind: Quantity, system: UnitSystem): QuantityEntry {
   const shown = readNumber(text);
-  return { text, si: shown === null ? null : toSi(shown, displayUnit(kind, system)) };
+  return { text, si: shown === null ? null : toSi(shown, kind, system) };
 }
 
 /** A stored value as a field shows it: enough digits to be the same value again, no thousands marks to edit around. */
-export function enteredValue(si: number | null | undefined, kind: QuantityKind, system: UnitSystem): QuantityEntry {
+export function enteredValue(si: number | null | undefined, kind: Quantity, system: UnitSystem): QuantityEntry {
   if (si === null || si === undefined) return emptyEntry;
-  const shown = Number(fromSi(si, displayUnit(kind, system)).toPrecision(9));
+  const shown = Number(fromSi(si, kind, system).toPrecision(9));
   return { text: String(shown), si };
 }
 
@@ -44,11 +44,11 @@ export function problemOfEntry(entry: QuantityEntry, rules: QuantityRules, syste
   return null;
 }
 
-function withUnit(si: number, kind: QuantityKind, system: UnitSystem): string {
-  const unit = displayUnit(kind, system);
-  const shown = fromSi(si, unit);
+function withUnit(si: number, kind: Quantity, system: UnitSystem): string {
+  const { symbol } = unitOf(kind, system);
+  const shown = fromSi(si, kind, system);
   // Bounds are round in SI and crooked elsewhere: three figures say enough.
   const rounded = Number(shown.toPrecision(3));
   const decimals = Math.max(0, (String(rounded).split('.')[1] ?? '').length);
-  return `${formatNumber(rounded, decimals)}${unit.symbol === '' ? '' : ` ${unit.symbol}`}`;
+  return `${formatNumber(rounded, decimals)}${symbol === '' ? '' : ` ${symbol}`}`;
 }

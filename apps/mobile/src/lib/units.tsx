@@ -1,35 +1,35 @@
 import type { UnitSystem } from '@strandnote/api/contract';
+import { formatNumber, fromSi, type Quantity, unitOf } from '@strandnote/core/units';
 import { createContext, type ReactNode, use, useMemo } from 'react';
-import { displayUnit, formatNumber, fromSi, type QuantityKind } from './display-units.ts';
+import { decimalsOf } from './display-units.ts';
 
 export interface Units {
   system: UnitSystem;
   /** "kN", "ft"; empty for a plain number. */
-  symbol: (kind: QuantityKind) => string;
+  symbol: (kind: Quantity) => string;
   /** The number alone, for a column whose head names the unit. */
-  figure: (si: number, kind: QuantityKind, decimals?: number) => string;
+  figure: (si: number, kind: Quantity, decimals?: number) => string;
   /** Number and unit. */
-  show: (si: number | null, kind: QuantityKind, decimals?: number) => string;
+  show: (si: number | null, kind: Quantity, decimals?: number) => string;
   /** The number in the person's units, for drawings. */
-  value: (si: number, kind: QuantityKind) => number;
+  value: (si: number, kind: Quantity) => number;
 }
 
 function unitsOf(system: UnitSystem): Units {
   const figure: Units['figure'] = (si, kind, decimals) => {
-    const unit = displayUnit(kind, system);
-    return formatNumber(fromSi(si, unit), decimals ?? unit.decimals);
+    return formatNumber(fromSi(si, kind, system), decimals ?? decimalsOf(kind, system));
   };
   return {
     system,
     figure,
-    symbol: (kind) => displayUnit(kind, system).symbol,
+    symbol: (kind) => unitOf(kind, system).symbol,
     show: (si, kind, decimals) => {
       if (si === null) return 'not stated';
-      const { symbol } = displayUnit(kind, system);
+      const { symbol } = unitOf(kind, system);
       const space = symbol === '' || symbol === '°' ? '' : '\u00A0';
       return `${figure(si, kind, decimals)}${space}${symbol}`;
     },
-    value: (si, kind) => fromSi(si, displayUnit(kind, system)),
+    value: (si, kind) => fromSi(si, kind, system),
   };
 }
 

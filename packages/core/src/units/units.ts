@@ -22,7 +22,10 @@ export type Quantity =
   | 'modulus'
   | 'bending-stiffness'
   | 'rotational-stiffness'
-  | 'angle';
+  | 'angle'
+  | 'percent'
+  | 'ratio'
+  | 'count';
 
 /** How a unit is written, and how it turns into SI: value in SI = shown × factor + offset. */
 export interface Unit {
@@ -53,6 +56,9 @@ const units: Record<Quantity, Record<UnitSystem, Unit>> = {
   'bending-stiffness': { si: unit('kN·m²', 1000), us: unit('kip·ft²', kip * foot ** 2) },
   'rotational-stiffness': { si: unit('kN·m/rad', 1000), us: unit('kip·ft/rad', kip * foot) },
   angle: { si: unit('°', Math.PI / 180), us: unit('°', Math.PI / 180) },
+  percent: { si: unit('%', 0.01), us: unit('%', 0.01) },
+  ratio: { si: unit('', 1), us: unit('', 1) },
+  count: { si: unit('', 1), us: unit('', 1) },
 };
 
 /**

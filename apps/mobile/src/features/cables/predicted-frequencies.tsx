@@ -1,8 +1,8 @@
 import type { CableDetail, Span } from '@strandnote/api/contract';
 import { freeLength, massPerLength, naturalFrequencies } from '@strandnote/core';
+import { formatNumber } from '@strandnote/core/units';
 import { useMemo } from 'react';
 import { StringFigure } from '../../drawings/index.ts';
-import { formatNumber } from '../../lib/display-units.ts';
 import { useUnits } from '../../lib/units.tsx';
 import { type Column, DataTable, Heading, Stack, Text } from '../../ui/index.ts';
 

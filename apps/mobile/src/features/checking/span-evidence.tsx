@@ -1,9 +1,9 @@
 import { estimateTension } from '@strandnote/core';
 import { sharedScale } from '@strandnote/core/drawing';
 import type { FrozenPeak } from '@strandnote/core/report-content';
+import { formatNumber } from '@strandnote/core/units';
 import { type ReactNode, useMemo, useState } from 'react';
 import { FitPlot, IntervalBar, ResidualPlot } from '../../drawings/index.ts';
-import { formatNumber } from '../../lib/display-units.ts';
 import { showTension } from '../../lib/show-tension.ts';
 import { type Units, useUnits } from '../../lib/units.tsx';
 import { Button, type Column, DataTable, Definitions, Heading, Notice, Row, Stack, Text } from '../../ui/index.ts';

@@ -1,4 +1,4 @@
-import { formatNumber } from '../../lib/display-units.ts';
+import { formatNumber } from '@strandnote/core/units';
 import { showTension } from '../../lib/show-tension.ts';
 import { showDay } from '../../lib/show-time.ts';
 import type { Units } from '../../lib/units.tsx';

@@ -1,9 +1,9 @@
 import type { FrozenInput, FrozenSpan } from '@strandnote/core/report-content';
-import type { QuantityKind } from '../../lib/display-units.ts';
+import type { Quantity } from '@strandnote/core/units';
 import type { Units } from '../../lib/units.tsx';
 import type { Definition } from '../../ui/definitions.tsx';
 
-const words: Record<FrozenInput['quantity'], { term: string; kind: QuantityKind }> = {
+const words: Record<FrozenInput['quantity'], { term: string; kind: Quantity }> = {
   'chord-length': { term: 'Chord', kind: 'length' },
   'lower-deduction': { term: 'Lower deduction', kind: 'length' },
   'upper-deduction': { term: 'Upper deduction', kind: 'length' },

@@ -1,5 +1,5 @@
 import type { ModalPeak, Span, UnitSystem } from '@strandnote/api/contract';
-import { formatNumber } from '../../lib/display-units.ts';
+import { formatNumber } from '@strandnote/core/units';
 import { problemOfEntry, type QuantityRules } from '../../lib/quantity-entry.ts';
 import { type EntryDraft, isBlank, modeOf, type PeakDraft, type VisitDraft } from './entry-draft.ts';
 import { readInstant } from './visit-time.ts';

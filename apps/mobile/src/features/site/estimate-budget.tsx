@@ -1,6 +1,6 @@
 import type { StoredEstimate } from '@strandnote/core/report-content';
+import { formatNumber } from '@strandnote/core/units';
 import { View } from 'react-native';
-import { formatNumber } from '../../lib/display-units.ts';
 import { useColours } from '../../theme/use-theme.tsx';
 import { Heading, Panel, Row, Stack, Text } from '../../ui/index.ts';
 

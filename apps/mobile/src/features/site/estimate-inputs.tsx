@@ -1,7 +1,7 @@
 import type { Cable, PropertySource, Span } from '@strandnote/api/contract';
 import { freeLength, massPerLength } from '@strandnote/core';
 import type { StoredEstimate } from '@strandnote/core/report-content';
-import { formatNumber } from '../../lib/display-units.ts';
+import { formatNumber } from '@strandnote/core/units';
 import { type Units, useUnits } from '../../lib/units.tsx';
 import { Columns, type Definitions as DefinitionList, Definitions, Heading, Panel, Text } from '../../ui/index.ts';
 

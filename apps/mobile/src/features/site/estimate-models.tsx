@@ -1,6 +1,6 @@
 import type { StoredEstimate } from '@strandnote/core/report-content';
+import { formatNumber } from '@strandnote/core/units';
 import { useMemo } from 'react';
-import { formatNumber } from '../../lib/display-units.ts';
 import { type Units, useUnits } from '../../lib/units.tsx';
 import { type Column, DataTable, Heading, Stack } from '../../ui/index.ts';
 

@@ -1,7 +1,7 @@
+import { formatNumber } from '@strandnote/core/units';
 import { memo, useState } from 'react';
 import { useWindowDimensions, View } from 'react-native';
 import { StringFigure } from '../../drawings/index.ts';
-import { formatNumber } from '../../lib/display-units.ts';
 import { space } from '../../theme/tokens.ts';
 import { QuantityField, type QuantityFieldProps, Row, Stack, Text, Touchable, useWide } from '../../ui/index.ts';
 import { frequencyRules, type PeakProblems } from './check-entry.ts';

@@ -1,4 +1,4 @@
-import type { QuantityKind } from '../../lib/display-units.ts';
+import type { Quantity } from '@strandnote/core/units';
 
 /** How a quantity is said in the person's units: `show` of `useUnits()`. */
-export type ShowQuantity = (si: number | null, kind: QuantityKind, decimals?: number) => string;
+export type ShowQuantity = (si: number | null, kind: Quantity, decimals?: number) => string;
